@@ -48,5 +48,10 @@ export function undo(history: History): History {
 export function redo(history: History): History {
   const [next, ...future] = history.future;
   if (next === undefined) return history;
-  return { layout: next.layout, past: [...history.past, { layout: history.layout, label: next.label }], future, mark: null };
+  return {
+    layout: next.layout,
+    past: [...history.past, { layout: history.layout, label: next.label }],
+    future,
+    mark: null,
+  };
 }
