@@ -8,8 +8,10 @@ import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import { startPredicting } from '../session/session';
 import App from './App';
-import { openFirst } from './first';
+import { keepPreferences } from './preferences';
+import { openFirst } from './venues';
 
+keepPreferences();
 startPredicting(() => new Worker(new URL('../predict/worker.ts', import.meta.url), { type: 'module' }));
 openFirst();
 const root = document.getElementById('app');

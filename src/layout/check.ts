@@ -12,8 +12,17 @@ import { type Seat, seatsOf } from './seating';
  * room. Errors first, in file order. A layout with errors is not predicted.
  */
 export function checkLayout(layout: Layout): Problem[] {
+  const faces: Faces = facesOf(layout.venue);
+  const structure = checkStructure(layout, faces);
+  // Places are only judged in a room that stands.
+  if (structure.some((problem) => problem.severity === 'error')) return errorsFirst(structure);
+  return errorsFirst([...structure, ...checkPlaces(layout, faces, seatsOf(layout.venue.seating))]);
+}
+
+/** The part of `checkLayout` without which a layout cannot even be shown: names, ids and faces. */
+export function checkStructure(layout: Layout, faces: Faces = facesOf(layout.venue)): Problem[] {
   const seats = seatsOf(layout.venue.seating);
-  const names = [
+  return [
     ...repeatedIds(layout, seats),
     ...layout.venue.faces.flatMap((face, i) =>
       layout.venue.finishes.some((finish) => finish.id === face.finish)
@@ -24,17 +33,19 @@ export function checkLayout(layout: Layout): Problem[] {
       checkModel(layout, `venue.talkers[${i}].model`, talker.model, 'talker'),
     ),
     ...layout.schemes.flatMap((scheme, i) => checkScheme(layout, scheme, `schemes[${i}]`)),
-    ...layout.models.flatMap((model, i) => checkTable(model, `models[${i}].pattern`)),
+    ...layout.models.flatMap((model, i) => [
+      ...checkTable(model, `models[${i}].pattern`),
+      ...checkCap(model, `models[${i}].pattern`),
+    ]),
     ...unusedOmissions(layout),
+    ...checkFaces(layout.venue, faces),
   ];
-  const faces: Faces = facesOf(layout.venue);
-  const shapes = checkFaces(layout.venue, faces);
-  // Places are only judged in a room that stands.
-  const stands = ![...names, ...shapes].some((problem) => problem.severity === 'error');
-  const places = stands ? checkPlaces(layout, faces, seats) : [];
-  const all = [...names, ...shapes, ...places];
-  return [...all.filter((p) => p.severity === 'error'), ...all.filter((p) => p.severity === 'caution')];
 }
+
+const errorsFirst = (problems: readonly Problem[]): Problem[] => [
+  ...problems.filter((problem) => problem.severity === 'error'),
+  ...problems.filter((problem) => problem.severity === 'caution'),
+];
 
 const ids = (list: readonly { id: string }[]): string[] => list.map((item) => item.id);
 
@@ -118,6 +129,14 @@ function checkScheme(layout: Layout, scheme: Scheme, path: string): Problem[] {
       return problems;
     }),
   ];
+}
+
+/** A radiating cap fits on its sphere. */
+function checkCap(model: DeviceModel, path: string): Problem[] {
+  const { pattern } = model;
+  if (pattern.type !== 'cap-on-sphere' && pattern.type !== 'column') return [];
+  if (pattern.cap <= pattern.sphere) return [];
+  return [errorAt(`${path}.cap`, 'the cap is larger than its sphere', `at most ${pattern.sphere} m`, 'enter diameters')];
 }
 
 /** A table's levels must have the shape its angles say, rising angles, and 0 dB on its axis. */

@@ -197,7 +197,8 @@ const scheme = v.object(
   'a scheme: id, label, microphones, loudspeakers, routing, system',
 );
 
-const size = (what: string) => positive(100, `${what} in metres`);
+/** Larger devices than this are slips of the unit, and their patterns would take minutes to compute. */
+const size = (what: string) => positive(3, `${what} in metres`);
 const angle = positive(360, 'an angle in degrees');
 const alpha = between(0, 1, 'a pattern coefficient');
 
@@ -222,7 +223,7 @@ const pattern = v.variant('type', [
     type: v.literal('column'),
     drivers: whole(1, 200, 'a number of drivers'),
     spacing: size('a driver spacing'),
-    steer: v.optional(between(-90, 90, 'a steering angle in degrees'), 0),
+    steer: v.optional(between(-60, 60, 'a steering angle in degrees'), 0),
     sphere: size('a sphere diameter'),
     cap: size('a cap diameter'),
   }),

@@ -27,7 +27,7 @@ export function predictionText(layout: Layout, prediction: Prediction, problems:
 function sayNeed(layout: Layout): string {
   const { need } = layout;
   return need.kind === 'distance'
-    ? `every seat to hear as if at ${figure(need.metres, 1)} m`
+    ? `every seat to hear as if at ${Number(need.metres.toFixed(2))} m`
     : `every seat to hear ${figure(need.signalToNoise, 0)} dB above the noise`;
 }
 

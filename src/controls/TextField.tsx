@@ -1,0 +1,94 @@
+import { type KeyboardEvent, useId, useRef, useState } from 'react';
+import type { Phase } from './QuantityField';
+
+export interface TextFieldProps {
+  /** Accessible name. */
+  label: string;
+  /** Short visible name. */
+  name?: string;
+  value: string;
+  placeholder?: string;
+  /** Why a text is not accepted, null where it is. */
+  refuse?: (text: string) => string | null;
+  /** Sends each text while typing, not only the last. */
+  live?: boolean;
+  multiline?: boolean;
+  className?: string;
+  onChange: (value: string, phase: Phase) => void;
+  onCancel?: () => void;
+}
+
+/** A text to type. Enter or leaving settles it, Escape takes it back; what is not accepted stays until mended. */
+export function TextField(props: TextFieldProps) {
+  const { label, name, value, refuse, live = false, multiline = false } = props;
+  const whyId = useId();
+  const [typed, setTyped] = useState<string | null>(null);
+  const [why, setWhy] = useState<string | null>(null);
+  const underWay = useRef(false);
+
+  const takeBack = () => {
+    if (underWay.current) props.onCancel?.();
+    underWay.current = false;
+  };
+  const type = (text: string) => {
+    setTyped(text);
+    const reason = refuse?.(text) ?? null;
+    setWhy(text === '' ? null : reason);
+    if (reason !== null) takeBack();
+    else if (live) {
+      underWay.current = true;
+      props.onChange(text, 'live');
+    }
+  };
+  const settle = () => {
+    if (typed === null) return;
+    const reason = refuse?.(typed) ?? null;
+    if (reason !== null) return setWhy(reason);
+    if (typed !== value || underWay.current) props.onChange(typed, 'commit');
+    underWay.current = false;
+    setTyped(null);
+    setWhy(null);
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.key === 'Enter' && !(multiline && !event.ctrlKey && !event.metaKey)) settle();
+    else if (event.key === 'Escape' && typed !== null) {
+      takeBack();
+      setTyped(null);
+      setWhy(null);
+    } else return;
+    event.preventDefault();
+    event.stopPropagation();
+  };
+  const shared = {
+    'aria-label': label,
+    'aria-invalid': why !== null,
+    'aria-describedby': why === null ? undefined : whyId,
+    'data-typing': typed !== null || undefined,
+    className: 'txt',
+    placeholder: props.placeholder,
+    value: typed ?? value,
+    onBlur: settle,
+    onKeyDown,
+  };
+  return (
+    <label className={`field ${multiline ? 'tall' : ''} ${props.className ?? ''}`} data-invalid={why !== null || undefined}>
+      <span>
+        {name !== undefined && (
+          <span className="field-name" aria-hidden="true">
+            {name}
+          </span>
+        )}
+        {multiline ? (
+          <textarea {...shared} rows={3} onChange={(event) => type(event.target.value)} />
+        ) : (
+          <input {...shared} type="text" autoComplete="off" spellCheck={false} onChange={(event) => type(event.target.value)} />
+        )}
+      </span>
+      {why !== null && (
+        <em className="field-why" id={whyId} role="alert">
+          {why}
+        </em>
+      )}
+    </label>
+  );
+}
