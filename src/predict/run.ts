@@ -1,5 +1,6 @@
 import { BAND_COUNT } from '../acoustics/bands';
 import { dbOfPower } from '../acoustics/level';
+import type { Source } from '../acoustics/paths/finder';
 import { findModel } from '../layout/catalogue';
 import type { DeviceKind, Layout, Scheme } from '../layout/schema';
 import { rungGains, talkerLoops, workingPoint } from './loop-stage';
@@ -36,27 +37,8 @@ export function predict(layout: Layout, schemeIds?: readonly string[]): Predicti
 
 function predictScheme(layout: Layout, scheme: Scheme, venue: PreparedVenue): SchemePrediction {
   const prepared = prepareScheme(layout, scheme, venue);
-  const { microphones, loudspeakers } = prepared;
-  const toMicrophones = rungGains(
-    venue,
-    venue.talkers.map((talker) => talker.source),
-    microphones,
-  );
-  const returns = rungGains(
-    venue,
-    loudspeakers.map((loudspeaker) => loudspeaker.source),
-    microphones,
-  );
-  const M = microphones.length;
-  const loops: TalkerLoop[] = venue.talkers.map((talker, t) => {
-    const states = talkerLoops(venue, prepared, talker, t, toMicrophones, returns);
-    return {
-      talker,
-      states,
-      point: workingPoint(venue, prepared, states.room, returns),
-      lengthsM: toMicrophones.lengthsM.slice(t * M, (t + 1) * M),
-    };
-  });
+  const { loudspeakers } = prepared;
+  const loops = loopsOf(venue, prepared);
   const figures = seatFigures(venue, prepared, loops, layout.need);
   const talkers = loops.map((loop, t) => talkerPrediction(venue, prepared, loop, figures[t], t));
   return {
@@ -67,6 +49,23 @@ function predictScheme(layout: Layout, scheme: Scheme, venue: PreparedVenue): Sc
     loudspeakerIds: loudspeakers.map((loudspeaker) => loudspeaker.id),
     ...worstTalkers(talkers, venue.seats.length),
   };
+}
+
+/** The loop of each talker: few paths, all kept. */
+export function loopsOf(venue: PreparedVenue, scheme: PreparedScheme): TalkerLoop[] {
+  const sourcesOf = (list: readonly { source: Source }[]) => list.map((item) => item.source);
+  const toMicrophones = rungGains(venue, sourcesOf(venue.talkers), scheme.microphones);
+  const returns = rungGains(venue, sourcesOf(scheme.loudspeakers), scheme.microphones);
+  const M = scheme.microphones.length;
+  return venue.talkers.map((talker, t) => {
+    const states = talkerLoops(venue, scheme, talker, t, toMicrophones, returns);
+    return {
+      talker,
+      states,
+      point: workingPoint(venue, scheme, states.room, returns),
+      lengthsM: toMicrophones.lengthsM.slice(t * M, (t + 1) * M),
+    };
+  });
 }
 
 function talkerPrediction(

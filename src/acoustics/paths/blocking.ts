@@ -18,7 +18,7 @@ export function isBlocked(
   skipA: number,
   skipB: number,
 ): boolean {
-  const lengthM = Math.hypot(bx - ax, by - ay, bz - az);
+  const lengthM = Math.sqrt((bx - ax) ** 2 + (by - ay) ** 2 + (bz - az) ** 2);
   for (let face = 0; face < faces.count; face++) {
     if (face === skipA || face === skipB) continue;
     const from = heightAbove(faces, face, ax, ay, az);

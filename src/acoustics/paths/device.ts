@@ -38,7 +38,7 @@ export function devicePowers(device: Device, x: number, y: number, z: number, ou
     out.fill(1, at, at + 7);
     return;
   }
-  const length = Math.hypot(x, y, z);
+  const length = Math.sqrt(x * x + y * y + z * z);
   if (length === 0) {
     pattern.powers(1, 0, 0, out, at);
     return;

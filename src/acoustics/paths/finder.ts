@@ -1,8 +1,8 @@
 import { BAND_COUNT } from '../bands';
-import { DB_PER_POWER_NEPER } from '../level';
 import type { RoomField } from '../room/decay';
 import { diffuseGains, firstAbsorption } from '../room/diffuse';
 import type { Faces } from '../room/faces';
+import { createAirLoss } from './air-loss';
 import { isBlocked } from './blocking';
 import { type Device, devicePowers } from './device';
 import { createReflection, type ImageTree, imageTree, traceImage } from './images';
@@ -75,7 +75,9 @@ export interface PathFinder {
 
 export function createPathFinder(room: PathRoom): PathFinder {
   const { faces, field, airDbPerM, reflectionOrder } = room;
-  const airNepers = airDbPerM.map((attenuation) => attenuation / DB_PER_POWER_NEPER);
+  const airLoss = createAirLoss(airDbPerM);
+  const there = new Float64Array(3);
+  const back = new Float64Array(3);
   const received = new Float64Array(BAND_COUNT);
   const reflection = createReflection();
   let valid = new Uint8Array(64);
@@ -86,9 +88,9 @@ export function createPathFinder(room: PathRoom): PathFinder {
   /** D_S² · D_X² · r⁻² · 10^(−a r/10), the directions being those in which the path leaves each device. */
   function gainsAlong(
     source: Device,
-    departure: ArrayLike<number>,
+    departure: Float64Array,
     receiver: Device,
-    arrival: ArrayLike<number>,
+    arrival: Float64Array,
     lengthM: number,
     out: Float64Array,
     at: number,
@@ -96,16 +98,21 @@ export function createPathFinder(room: PathRoom): PathFinder {
     const r = Math.max(lengthM, LEAST_DISTANCE_M);
     devicePowers(source, departure[0], departure[1], departure[2], out, at);
     devicePowers(receiver, arrival[0], arrival[1], arrival[2], received, 0);
-    for (let b = 0; b < BAND_COUNT; b++) out[at + b] *= (received[b] * Math.exp(-airNepers[b] * r)) / (r * r);
+    airLoss(r, received);
+    const spread = 1 / (r * r);
+    for (let b = 0; b < BAND_COUNT; b++) out[at + b] *= received[b] * spread;
   }
 
   function findDirect(source: Device, receiver: Device, out: PairPaths): void {
-    const [dx, dy, dz] = [receiver.x - source.x, receiver.y - source.y, receiver.z - source.z];
-    out.lengthM = Math.hypot(dx, dy, dz);
+    there[0] = receiver.x - source.x;
+    there[1] = receiver.y - source.y;
+    there[2] = receiver.z - source.z;
+    for (let axis = 0; axis < 3; axis++) back[axis] = -there[axis];
+    out.lengthM = Math.sqrt(there[0] * there[0] + there[1] * there[1] + there[2] * there[2]);
     out.distanceGain = 1 / Math.max(out.lengthM, LEAST_DISTANCE_M) ** 2;
     out.blocked = isBlocked(faces, source.x, source.y, source.z, receiver.x, receiver.y, receiver.z, -1, -1);
     if (out.blocked) out.direct.fill(0);
-    else gainsAlong(source, [dx, dy, dz], receiver, [-dx, -dy, -dz], out.lengthM, out.direct, 0);
+    else gainsAlong(source, there, receiver, back, out.lengthM, out.direct, 0);
   }
 
   function findReflected(source: Source, receiver: Device, out: PairPaths): void {

@@ -115,7 +115,9 @@ export function traceImage(
   const height = heightAbove(faces, last, x, y, z);
   if (Math.abs(height) <= ON_PLANE_M || (height < 0 && !faces.twoSided[last])) return false;
   const p = tree.positions;
-  let [tx, ty, tz] = [x, y, z];
+  let tx = x;
+  let ty = y;
+  let tz = z;
   let previous = -1;
   for (let at = image; at !== 0; at = tree.parents[at]) {
     const face = tree.faces[at];
@@ -134,13 +136,15 @@ export function traceImage(
       out.arrival[1] = hy - y;
       out.arrival[2] = hz - z;
     }
-    [tx, ty, tz] = [hx, hy, hz];
+    tx = hx;
+    ty = hy;
+    tz = hz;
     previous = face;
   }
   if (isBlocked(faces, tx, ty, tz, p[0], p[1], p[2], previous, -1)) return false;
   out.departure[0] = tx - p[0];
   out.departure[1] = ty - p[1];
   out.departure[2] = tz - p[2];
-  out.lengthM = Math.hypot(p[3 * image] - x, p[3 * image + 1] - y, p[3 * image + 2] - z);
+  out.lengthM = Math.sqrt((p[3 * image] - x) ** 2 + (p[3 * image + 1] - y) ** 2 + (p[3 * image + 2] - z) ** 2);
   return true;
 }

@@ -51,6 +51,11 @@ interface End {
  * written to `out`.
  */
 export function diffuseGains(field: RoomField, order: number, from: End, to: End, out: Float64Array): void {
+  // Without faces nothing comes back.
+  if (field.surfaceM2 === 0) {
+    out.fill(0);
+    return;
+  }
   for (let b = 0; b < BAND_COUNT; b++) {
     const source = 1 - from.absorption[b];
     const receiver = 1 - to.absorption[b];

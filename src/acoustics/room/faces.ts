@@ -29,6 +29,8 @@ export interface Faces {
   flatAxis: Uint8Array;
   /** [face·6]: least and greatest x, y, z, metres. */
   bounds: Float64Array;
+  /** [face]: planes through the edges, square to the face, x y z offset each, positive outwards; null where concave. */
+  edgePlanes: (Float64Array | null)[];
 }
 
 /** Points this near an edge count as inside, metres. */
@@ -47,10 +49,12 @@ export function createFaces(inputs: readonly FaceInput[]): Faces {
     twoSided: Uint8Array.from(inputs, (input) => (input.sides === 2 ? 1 : 0)),
     flatAxis: new Uint8Array(count),
     bounds: new Float64Array(6 * count),
+    edgePlanes: [],
   };
   inputs.forEach((input, face) => {
     faces.absorption.set(input.absorption, face * BAND_COUNT);
     measureFace(faces, face);
+    faces.edgePlanes.push(convexEdges(faces, face));
   });
   return faces;
 }
@@ -101,26 +105,53 @@ export function heightAbove(faces: Faces, face: number, x: number, y: number, z:
   return n[3 * face] * x + n[3 * face + 1] * y + n[3 * face + 2] * z - faces.offsets[face];
 }
 
+/** Planes through the edges of a convex face, null for a concave one. */
+function convexEdges(faces: Faces, face: number): Float64Array | null {
+  const corners = faces.corners[face];
+  const n = corners.length / 3;
+  const [nx, ny, nz] = faces.normals.subarray(3 * face, 3 * face + 3);
+  const planes = new Float64Array(4 * n);
+  for (let i = 0; i < n; i++) {
+    const [a, b] = [3 * i, 3 * ((i + 1) % n)];
+    const [ex, ey, ez] = [corners[b] - corners[a], corners[b + 1] - corners[a + 1], corners[b + 2] - corners[a + 2]];
+    const length = Math.hypot(ex, ey, ez) || 1;
+    // Corners run counter-clockwise about the normal, so edge × normal points out of the face.
+    const out = [(ey * nz - ez * ny) / length, (ez * nx - ex * nz) / length, (ex * ny - ey * nx) / length];
+    const offset = out[0] * corners[a] + out[1] * corners[a + 1] + out[2] * corners[a + 2];
+    planes.set([...out, offset], 4 * i);
+    for (let k = 0; k < n; k++) {
+      const beyond = out[0] * corners[3 * k] + out[1] * corners[3 * k + 1] + out[2] * corners[3 * k + 2] - offset;
+      if (beyond > EDGE_M) return null;
+    }
+  }
+  return planes;
+}
+
 /** True where a point of the face's plane lies inside its outline or within 1 µm of an edge. */
 export function insideOutline(faces: Faces, face: number, x: number, y: number, z: number): boolean {
-  const b = 6 * face;
-  const bounds = faces.bounds;
-  // The box is widened by more than the edge rule, because the point may lie a little off the plane.
-  const slack = 1e-5;
-  if (x < bounds[b] - slack || x > bounds[b + 1] + slack) return false;
-  if (y < bounds[b + 2] - slack || y > bounds[b + 3] + slack) return false;
-  if (z < bounds[b + 4] - slack || z > bounds[b + 5] + slack) return false;
+  const planes = faces.edgePlanes[face];
+  if (planes === null) return insideConcave(faces, face, x, y, z);
+  for (let i = 0; i < planes.length; i += 4) {
+    if (planes[i] * x + planes[i + 1] * y + planes[i + 2] * z - planes[i + 3] > EDGE_M) return false;
+  }
+  return true;
+}
+
+/** Even-odd rule in the two axes that show the face best (Shimrat, Algorithm 112, CACM 5, 1962). */
+function insideConcave(faces: Faces, face: number, x: number, y: number, z: number): boolean {
   const corners = faces.corners[face];
   const drop = faces.flatAxis[face];
   const first = drop === 0 ? 1 : 0;
   const second = drop === 2 ? 1 : 2;
-  const p = [x, y, z];
-  const [px, py] = [p[first], p[second]];
+  const px = first === 0 ? x : y;
+  const py = second === 1 ? y : z;
   let inside = false;
   const n = corners.length / 3;
   for (let i = 0, j = n - 1; i < n; j = i++) {
-    const [ax, ay] = [corners[3 * i + first], corners[3 * i + second]];
-    const [bx, by] = [corners[3 * j + first], corners[3 * j + second]];
+    const ax = corners[3 * i + first];
+    const ay = corners[3 * i + second];
+    const bx = corners[3 * j + first];
+    const by = corners[3 * j + second];
     if (ay > py !== by > py && px < ((bx - ax) * (py - ay)) / (by - ay) + ax) inside = !inside;
     if (distanceToSegment(corners, 3 * i, 3 * j, x, y, z) <= EDGE_M) return true;
   }
@@ -165,7 +196,9 @@ export function firstHit(
     if (Math.abs(slope) < 1e-12) continue;
     const distanceM = -heightAbove(faces, face, origin[0], origin[1], origin[2]) / slope;
     if (distanceM < leastM || (hit !== null && distanceM >= hit.distanceM)) continue;
-    const [x, y, z] = [0, 1, 2].map((axis) => origin[axis] + distanceM * direction[axis]);
+    const x = origin[0] + distanceM * direction[0];
+    const y = origin[1] + distanceM * direction[1];
+    const z = origin[2] + distanceM * direction[2];
     if (insideOutline(faces, face, x, y, z)) hit = { face, distanceM };
   }
   return hit;
