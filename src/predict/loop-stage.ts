@@ -1,6 +1,6 @@
 import { BAND_COUNT } from '../acoustics/bands';
 import { A_WEIGHTS, powerOfDb } from '../acoustics/level';
-import { type LoopInput, type LoopLimit, loopLimit, loopMatrix } from '../acoustics/loop/limit';
+import { type LoopInput, type LoopLimit, limitAlone, loopLimit, loopMatrix } from '../acoustics/loop/limit';
 import { directToScattered, peakAllowanceDb, peakChances } from '../acoustics/loop/peaks';
 import { spectralRadius } from '../acoustics/loop/perron';
 import { heardPowers, shares } from '../acoustics/loop/shares';
@@ -48,25 +48,26 @@ export interface RungState {
   talkerGains: Float64Array;
 }
 
-/** Loops of all three rungs for one talker. `toMicrophones` is talker by microphone, `returns` loudspeaker by microphone. */
+/** Loops of all three rungs for one talker. `toMicrophones` is talker by microphone. */
 export function talkerLoops(
   venue: PreparedVenue,
   scheme: PreparedScheme,
   talker: PreparedTalker,
   talkerIndex: number,
   toMicrophones: RungGains,
-  returns: RungGains,
+  inputs: Record<Rung, LoopInput>,
+  idleLimits: Record<Rung, number | null>,
 ): Record<Rung, RungState> {
   const M = scheme.microphones.length;
   const one = (rung: Rung): RungState => {
     const bands = rung === 'distance' ? 1 : BAND_COUNT;
     const talkerGains = toMicrophones[rung].slice(talkerIndex * M * bands, (talkerIndex + 1) * M * bands);
-    const input = loopInput(scheme, returns, rung, bands);
+    const input = inputs[rung];
     const heard = heardOn(rung, venue, scheme, talker, talkerGains);
     const { open, sharing } = scheme;
     const share = shares({ microphones: M, open, sharing, ...heard });
     const limit = loopLimit(input, share);
-    const idle = idleLimit(scheme, input, limit, heard.noise);
+    const idle = scheme.gainSharing && !scheme.sharing.includes(1) ? limit.limitDb : idleLimits[rung];
     const loop: RungLoop = {
       limitDb: limit.limitDb,
       idleLimitDb: idle,
@@ -79,6 +80,15 @@ export function talkerLoops(
     return { loop, input, limit, share, talkerGains };
   };
   return { distance: one('distance'), directivity: one('directivity'), room: one('room') };
+}
+
+/** The loop of each rung, the same for all talkers. `returns` is loudspeaker by microphone. */
+export function loopInputs(scheme: PreparedScheme, returns: RungGains): Record<Rung, LoopInput> {
+  return {
+    distance: loopInput(scheme, returns, 'distance', 1),
+    directivity: loopInput(scheme, returns, 'directivity', BAND_COUNT),
+    room: loopInput(scheme, returns, 'room', BAND_COUNT),
+  };
 }
 
 function loopInput(scheme: PreparedScheme, returns: RungGains, rung: Rung, bands: number): LoopInput {
@@ -119,13 +129,31 @@ function heardOn(
   return heardPowers(talker.powers, talkerGains, venue.noisePowers, factors, A_WEIGHTS);
 }
 
-/** The limit when nobody speaks; the talker's own where no open microphone takes part; null without gain sharing. */
-function idleLimit(scheme: PreparedScheme, input: LoopInput, limit: LoopLimit, noise: Float64Array): number | null {
-  if (!scheme.gainSharing) return null;
-  if (!scheme.sharing.includes(1)) return limit.limitDb;
+/**
+ * The limit of each rung when nobody speaks, the same for all talkers: shares by noise alone. Null without gain sharing
+ * or where no open microphone takes part; a talker's own limit then holds in pauses too.
+ */
+export function idleLimits(
+  venue: PreparedVenue,
+  scheme: PreparedScheme,
+  inputs: Record<Rung, LoopInput>,
+): Record<Rung, number | null> {
+  if (!scheme.sharing.includes(1)) return { distance: null, directivity: null, room: null };
   const { open, sharing } = scheme;
-  const silence = new Float64Array(input.microphones);
-  return loopLimit(input, shares({ microphones: input.microphones, open, sharing, speech: silence, noise })).limitDb;
+  const microphones = scheme.microphones.length;
+  const silence = new Float64Array(microphones);
+  const limitWith = (input: LoopInput, noise: Float64Array) =>
+    limitAlone(input, shares({ microphones, open, sharing, speech: silence, noise }));
+  // On the distance rung every microphone hears the same noise.
+  const alike = new Float64Array(microphones).fill(1);
+  const factors = scheme.microphones.map((microphone) => microphone.device.directivityFactors);
+  const unheard = new Float64Array(microphones * BAND_COUNT);
+  const { noise } = heardPowers(unheard, unheard, venue.noisePowers, factors, A_WEIGHTS);
+  return {
+    distance: limitWith(inputs.distance, alike),
+    directivity: limitWith(inputs.directivity, noise),
+    room: limitWith(inputs.room, noise),
+  };
 }
 
 /** Working gain, what the loop adds there, and how far its peaks stand above its mean. Room rung. */

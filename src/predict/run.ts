@@ -3,7 +3,7 @@ import { dbOfPower } from '../acoustics/level';
 import type { Source } from '../acoustics/paths/finder';
 import { findModel } from '../layout/catalogue';
 import type { DeviceKind, Layout, Scheme } from '../layout/schema';
-import { rungGains, talkerLoops, workingPoint } from './loop-stage';
+import { idleLimits, loopInputs, rungGains, talkerLoops, workingPoint } from './loop-stage';
 import type { Prediction, SchemePrediction, TalkerPrediction } from './prediction';
 import { type PreparedScheme, type PreparedVenue, prepareScheme, prepareVenue } from './prepare';
 import { seatFigures, type TalkerLoop, type TalkerSeats } from './seat-stage';
@@ -56,9 +56,11 @@ export function loopsOf(venue: PreparedVenue, scheme: PreparedScheme): TalkerLoo
   const sourcesOf = (list: readonly { source: Source }[]) => list.map((item) => item.source);
   const toMicrophones = rungGains(venue, sourcesOf(venue.talkers), scheme.microphones);
   const returns = rungGains(venue, sourcesOf(scheme.loudspeakers), scheme.microphones);
+  const inputs = loopInputs(scheme, returns);
+  const idle = idleLimits(venue, scheme, inputs);
   const M = scheme.microphones.length;
   return venue.talkers.map((talker, t) => {
-    const states = talkerLoops(venue, scheme, talker, t, toMicrophones, returns);
+    const states = talkerLoops(venue, scheme, talker, t, toMicrophones, inputs, idle);
     return {
       talker,
       states,
@@ -111,7 +113,9 @@ function uniformity(totalDba: Float64Array, ownSeat: Uint8Array, sounding: boole
   if (levels.length === 0 || !sounding) return { spreadDb: null, deviationDb: null };
   const mean = levels.reduce((sum, level) => sum + level, 0) / levels.length;
   const square = levels.reduce((sum, level) => sum + (level - mean) ** 2, 0) / levels.length;
-  return { spreadDb: Math.max(...levels) - Math.min(...levels), deviationDb: Math.sqrt(square) };
+  // Sorting, because a large venue has more seats than a call takes arguments.
+  levels.sort();
+  return { spreadDb: levels[levels.length - 1] - levels[0], deviationDb: Math.sqrt(square) };
 }
 
 /** For each seat the talker with the lowest room margin, its own left out; a seat that cannot be served is the worst. */

@@ -210,9 +210,7 @@ function createSeatFigure(venue: PreparedVenue, scheme: PreparedScheme, need: Ne
   /** Levels, ratios, arrivals and intelligibility at working gain, on the room rung. */
   function hear(drive: TalkerDrive, seat: number, fromTalker: PairPaths, fromLoudspeakers: readonly PairPaths[]): void {
     const { talker, working, room } = drive;
-    unaided.forEach((_, b) => {
-      unaided[b] = talker.powers[b] * fromTalker.total[b];
-    });
+    for (let b = 0; b < BAND_COUNT; b++) unaided[b] = talker.powers[b] * fromTalker.total[b];
     system.fill(0);
     let directPower = weighted(talker.powers, fromTalker.direct);
     let [strongest, server] = [0, -1];

@@ -35,22 +35,30 @@ const TIE = 1e-9;
 
 /** Limit of a loop whose microphones have the shares w. */
 export function loopLimit(loop: LoopInput, share: Float64Array): LoopLimit {
-  const { microphones, bands } = loop;
-  const radii = new Float64Array(bands);
-  for (let b = 0; b < bands; b++) radii[b] = spectralRadius(loopMatrix(loop, share, b), microphones);
-  const band = worstBand(radii);
+  const { radii, band, limitDb } = worstLoop(loop, share);
   const bandLimitsDb = radii.map((radius) => (radius > 0 ? -dbOfPower(radius) : Number.NaN));
-  if (band < 0) {
-    return { radii, limitingBand: -1, limitDb: null, bandLimitsDb, openMicrophoneCostDb: null, crosspoints: null };
-  }
+  const looped = band >= 0;
   return {
     radii,
     limitingBand: band,
-    limitDb: bandLimitsDb[band],
+    limitDb,
     bandLimitsDb,
-    openMicrophoneCostDb: openMicrophoneCost(loop, share, band, radii[band]),
-    crosspoints: crosspointShares(loop, share, band),
+    openMicrophoneCostDb: looped ? openMicrophoneCost(loop, share, band, radii[band]) : null,
+    crosspoints: looped ? crosspointShares(loop, share, band) : null,
   };
+}
+
+/** Only the limit in dB of a loop, null where there is none. */
+export const limitAlone = (loop: LoopInput, share: Float64Array): number | null => worstLoop(loop, share).limitDb;
+
+function worstLoop(
+  loop: LoopInput,
+  share: Float64Array,
+): { radii: Float64Array; band: number; limitDb: number | null } {
+  const radii = new Float64Array(loop.bands);
+  for (let b = 0; b < loop.bands; b++) radii[b] = spectralRadius(loopMatrix(loop, share, b), loop.microphones);
+  const band = worstBand(radii);
+  return { radii, band, limitDb: band < 0 ? null : -dbOfPower(radii[band]) };
 }
 
 /** W[m][m′] = h Σ_l A[m][l] κ[l][m′] w[m′] of one band. */
@@ -77,13 +85,14 @@ function worstBand(radii: Float64Array): number {
 
 /** 10 log(ρ / max_m W[m][m]/w[m]): what the other open microphones cost, 10 log N for N equal ones (common practice). */
 function openMicrophoneCost(loop: LoopInput, share: Float64Array, band: number, radius: number): number | null {
-  const alone = loopMatrix(
-    loop,
-    share.map((w) => (w > 0 ? 1 : 0)),
-    band,
-  );
+  const { microphones: M, loudspeakers: L, bands: B } = loop;
   let worst = 0;
-  for (let m = 0; m < loop.microphones; m++) worst = Math.max(worst, alone[m * loop.microphones + m]);
+  for (let m = 0; m < M; m++) {
+    if (share[m] === 0) continue;
+    let alone = 0;
+    for (let l = 0; l < L; l++) alone += loop.returns[(m * L + l) * B + band] * loop.routing[(l * M + m) * B + band];
+    worst = Math.max(worst, loop.filter[band] * alone);
+  }
   return worst > 0 ? dbOfPower(radius / worst) : null;
 }
 

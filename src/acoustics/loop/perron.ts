@@ -25,7 +25,7 @@ export function spectralRadius(matrix: Float64Array, size: number): number {
  * both vectors exist and are unique. The radius returned is that of the perturbed matrix.
  */
 export function perron(matrix: Float64Array, size: number): Perron {
-  const most = matrix.reduce((a, b) => Math.max(a, b), 0);
+  const most = greatest(matrix);
   const lifted = matrix.map((value) => value + (1e-9 * most) / size);
   const { radius, power } = squareUp(lifted, size);
   const right = new Float64Array(size);
@@ -44,20 +44,26 @@ function squareUp(matrix: Float64Array, size: number): { radius: number; power: 
   let power: Float64Array = matrix.slice();
   let logRadius = 0;
   for (let k = 0; k <= MOST_SQUARINGS; k++) {
-    const most = power.reduce((a, b) => Math.max(a, b), 0);
+    const most = greatest(power);
     if (most === 0) return { radius: 0, power };
     for (let i = 0; i < power.length; i++) power[i] /= most;
     const step = Math.log(most) / 2 ** k;
     logRadius += step;
     const next = square(power, size);
     // A settled power reproduces itself up to its scale; then ‖P²‖ = ρ'‖P‖ holds for good and the sum is a geometric one.
-    const scale = next.reduce((a, b) => Math.max(a, b), 0);
+    const scale = greatest(next);
     if (scale > 0 && sameUpTo(power, next, scale)) {
       return { radius: Math.exp(logRadius + Math.log(scale) / 2 ** k), power };
     }
     power = next;
   }
   return { radius: Math.exp(logRadius), power };
+}
+
+function greatest(values: Float64Array): number {
+  let most = 0;
+  for (let i = 0; i < values.length; i++) if (values[i] > most) most = values[i];
+  return most;
 }
 
 function square(a: Float64Array, size: number): Float64Array {

@@ -153,6 +153,9 @@ function insideConcave(faces: Faces, face: number, x: number, y: number, z: numb
     const bx = corners[3 * j + first];
     const by = corners[3 * j + second];
     if (ay > py !== by > py && px < ((bx - ax) * (py - ay)) / (by - ay) + ax) inside = !inside;
+    // Only an edge whose box holds the point can lie this near it.
+    if (px < Math.min(ax, bx) - EDGE_M || px > Math.max(ax, bx) + EDGE_M) continue;
+    if (py < Math.min(ay, by) - EDGE_M || py > Math.max(ay, by) + EDGE_M) continue;
     if (distanceToSegment(corners, 3 * i, 3 * j, x, y, z) <= EDGE_M) return true;
   }
   return inside;

@@ -99,16 +99,27 @@ export function shellVolume(faces: Faces): number {
 /** True inside a closed shell: the faces then cover the whole sphere of directions (Van Oosterom & Strackee 1983). */
 export function insideShell(faces: Faces, x: number, y: number, z: number): boolean {
   let solidAngle = 0;
-  eachTriangle(faces, (a, b, c) => {
-    const r = [a, b, c].map((p) => [p[0] - x, p[1] - y, p[2] - z]);
-    const l = r.map((p) => Math.hypot(p[0], p[1], p[2]));
-    const dot = (i: number, j: number) => r[i][0] * r[j][0] + r[i][1] * r[j][1] + r[i][2] * r[j][2];
-    const triple =
-      r[0][0] * (r[1][1] * r[2][2] - r[1][2] * r[2][1]) +
-      r[0][1] * (r[1][2] * r[2][0] - r[1][0] * r[2][2]) +
-      r[0][2] * (r[1][0] * r[2][1] - r[1][1] * r[2][0]);
-    solidAngle += 2 * Math.atan2(triple, l[0] * l[1] * l[2] + dot(0, 1) * l[2] + dot(0, 2) * l[1] + dot(1, 2) * l[0]);
-  });
+  for (let face = 0; face < faces.count; face++) {
+    if (faces.twoSided[face]) continue;
+    const c = faces.corners[face];
+    const [ax, ay, az] = [c[0] - x, c[1] - y, c[2] - z];
+    const a = Math.sqrt(ax * ax + ay * ay + az * az);
+    for (let i = 3; i + 5 < c.length; i += 3) {
+      const bx = c[i] - x;
+      const by = c[i + 1] - y;
+      const bz = c[i + 2] - z;
+      const cx = c[i + 3] - x;
+      const cy = c[i + 4] - y;
+      const cz = c[i + 5] - z;
+      const b = Math.sqrt(bx * bx + by * by + bz * bz);
+      const l = Math.sqrt(cx * cx + cy * cy + cz * cz);
+      const triple = ax * (by * cz - bz * cy) + ay * (bz * cx - bx * cz) + az * (bx * cy - by * cx);
+      const ab = ax * bx + ay * by + az * bz;
+      const bc = bx * cx + by * cy + bz * cz;
+      const ca = cx * ax + cy * ay + cz * az;
+      solidAngle += 2 * Math.atan2(triple, a * b * l + ab * l + ca * b + bc * a);
+    }
+  }
   return Math.abs(solidAngle) > 2 * Math.PI;
 }
 
