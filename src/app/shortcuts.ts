@@ -35,10 +35,10 @@ function keysOf(event: KeyboardEvent): string {
   return parts.join('+');
 }
 
-/** A field whose text differs from what it had when it was entered keeps its own undo. */
+/** A field with text that is not settled yet keeps its own undo. */
 function isTyping(target: EventTarget | null): boolean {
   return (
-    target instanceof HTMLTextAreaElement || (target instanceof HTMLInputElement && target.dataset.dirty === 'true')
+    target instanceof HTMLTextAreaElement || (target instanceof HTMLInputElement && target.dataset.typing === 'true')
   );
 }
 
