@@ -1,4 +1,4 @@
-import { readFileSync, writeFileSync } from 'node:fs';
+import { readFileSync, statSync, writeFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { parseArgs } from 'node:util';
 import { parseLayout } from '../formats/layout-json';
@@ -75,9 +75,20 @@ function readRequest(argv: string[]): Request {
   if (form === undefined) throw new Unusable(`--as: "${values.as}" is not known; one of ${FORMS.join(', ')}.`);
   const at = (path: string) => resolve(process.env.INIT_CWD ?? process.cwd(), path);
   const out = values.out === undefined ? undefined : at(values.out);
-  if (out === at(positionals[0]))
+  if (out !== undefined && sameFile(out, at(positionals[0])))
     throw new Unusable('--out: this is the layout itself, which is never written over; name another file.');
   return { file: at(positionals[0]), scheme: values.scheme, form, out, check: values.check };
+}
+
+/** True for one file under two names: another spelling, a symbolic or a hard link. */
+function sameFile(a: string, b: string): boolean {
+  if (a === b) return true;
+  try {
+    const [first, second] = [a, b].map((path) => statSync(path, { bigint: true }));
+    return first.dev === second.dev && first.ino === second.ino;
+  } catch {
+    return false;
+  }
 }
 
 function parse(argv: string[]) {
@@ -115,6 +126,10 @@ function render(form: Form, layout: Layout, prediction: Prediction, problems: re
 
 function write(request: Request, text: string): void {
   if (request.out === undefined) {
+    // A reader that has seen enough (head) closes the pipe: no fault of ours.
+    process.stdout.once('error', (error: NodeJS.ErrnoException) => {
+      if (error.code !== 'EPIPE') throw error;
+    });
     process.stdout.write(text);
     return;
   }

@@ -1,29 +1,27 @@
+import * as v from 'valibot';
 import { errorAt, type Outcome } from '../layout/problem';
 import { readLayout } from '../layout/read';
-import type { Layout } from '../layout/schema';
+import { type Layout, layoutSchema } from '../layout/schema';
+import { jsonFault } from './json-fault';
 
 /** A layout from the text of a file. Never throws: whatever is wrong comes back with its place and remedy. */
 export function parseLayout(text: string): Outcome<Layout> {
+  const json = text.replace(/^\uFEFF/, '');
   let value: unknown;
   try {
-    value = JSON.parse(text.replace(/^\uFEFF/, ''));
-  } catch (error) {
-    return { ok: false, problems: [syntaxProblem(text, error as SyntaxError)] };
+    value = JSON.parse(json);
+  } catch {
+    return { ok: false, problems: [syntaxProblem(json)] };
   }
   return readLayout(value);
 }
 
-function syntaxProblem(text: string, error: SyntaxError) {
-  if (text.trim() === '') return errorAt('', 'the file is empty', 'a layout is a JSON object', 'choose another file');
-  const position = Number(/position (\d+)/.exec(error.message)?.[1] ?? text.length);
-  const before = text.slice(0, position).split('\n');
+function syntaxProblem(json: string) {
+  if (json.trim() === '') return errorAt('', 'the file is empty', 'a layout is a JSON object', 'choose another file');
+  const fault = jsonFault(json) ?? { offset: json.length, expected: 'a JSON document' };
+  const before = json.slice(0, fault.offset).split('\n');
   const place = `line ${before.length}, column ${(before.at(-1) ?? '').length + 1}`;
-  return errorAt(
-    place,
-    'not valid JSON',
-    error.message.replace(/ in JSON at position.*$/, ''),
-    'mend it in a text editor',
-  );
+  return errorAt(place, 'not valid JSON', `expected ${fault.expected}`, 'mend it in a text editor');
 }
 
 /** Longest list of plain values written on one line. */
@@ -34,7 +32,9 @@ const LINE_WIDTH = 100;
  * than they need be, a final newline.
  */
 export function formatLayout(layout: Layout): string {
-  return `${write(layout, '')}\n`;
+  // The schema lays keys in its own order, whatever order edits added them in.
+  const ordered = v.safeParse(layoutSchema, layout);
+  return `${write(ordered.success ? ordered.output : layout, '')}\n`;
 }
 
 function write(value: unknown, indent: string): string {

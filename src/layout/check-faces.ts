@@ -73,6 +73,17 @@ function selfCrossing(corners: Float64Array, drop: number): [number, number] | n
 }
 
 function checkShell(venue: Venue, faces: Faces): Problem[] {
+  if (faces.count === 0) {
+    const expected = 'the faces that close the room, sides: 1';
+    return [
+      errorAt(
+        'venue.faces',
+        'there are no faces',
+        expected,
+        'add them; open air is one wide ground and a given "volume"',
+      ),
+    ];
+  }
   const shellFaces = venue.faces.filter((face) => face.sides === 1).length;
   if (shellFaces === 0) {
     if (venue.volume !== null) return [];

@@ -2,6 +2,7 @@ import type { Faces } from '../acoustics/room/faces';
 import { CATALOGUE_MODELS } from './catalogue';
 import { checkFaces } from './check-faces';
 import { checkPlaces } from './check-places';
+import { checkSize } from './check-size';
 import { facesOf } from './geometry';
 import { cautionAt, errorAt, type Problem } from './problem';
 import type { DeviceKind, DeviceModel, Layout, Scheme } from './schema';
@@ -21,6 +22,8 @@ export function checkLayout(layout: Layout): Problem[] {
 
 /** The part of `checkLayout` without which a layout cannot even be shown: names, ids and faces. */
 export function checkStructure(layout: Layout, faces: Faces = facesOf(layout.venue)): Problem[] {
+  const tooLarge = checkSize(layout);
+  if (tooLarge.length > 0) return tooLarge;
   const seats = seatsOf(layout.venue.seating);
   return [
     ...repeatedIds(layout, seats),
@@ -136,7 +139,9 @@ function checkCap(model: DeviceModel, path: string): Problem[] {
   const { pattern } = model;
   if (pattern.type !== 'cap-on-sphere' && pattern.type !== 'column') return [];
   if (pattern.cap <= pattern.sphere) return [];
-  return [errorAt(`${path}.cap`, 'the cap is larger than its sphere', `at most ${pattern.sphere} m`, 'enter diameters')];
+  return [
+    errorAt(`${path}.cap`, 'the cap is larger than its sphere', `at most ${pattern.sphere} m`, 'enter diameters'),
+  ];
 }
 
 /** A table's levels must have the shape its angles say, rising angles, and 0 dB on its axis. */

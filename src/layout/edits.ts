@@ -1,7 +1,8 @@
 import { type Draft, produce } from 'immer';
 import { findModel } from './catalogue';
 import type { Ref } from './ref';
-import type { Layout, Loudspeaker, Microphone, Scheme, Talker } from './schema';
+import type { Layout, Loudspeaker, Microphone, Scheme, Seating, Talker } from './schema';
+import { seatsOf } from './seating';
 
 /**
  * Edits of a layout. Each takes a layout and returns another, sharing what did not change; none fails: an edit of a
@@ -85,6 +86,7 @@ export const canCopy = (ref: Ref | null): ref is Ref & { kind: Copied } =>
 
 /** A copy of a thing beside it, and the ref of the copy; null where it cannot be copied. */
 export function duplicate(layout: Layout, schemeId: string, ref: Ref): { layout: Layout; ref: Ref } | null {
+  if (!canCopy(ref)) return null;
   let made: string | null = null;
   const next = produce(layout, (draft) => {
     const list = listOf(draft, schemeId, ref.kind);
@@ -96,7 +98,7 @@ export function duplicate(layout: Layout, schemeId: string, ref: Ref): { layout:
     if (ref.kind === 'talker' || ref.kind === 'microphone' || ref.kind === 'loudspeaker') {
       copy.position = original.position?.map((c, axis) => (axis === 1 ? c + 0.5 : c));
     }
-    if (ref.kind === 'seating') renameSeats(copy as Draft<Layout['venue']['seating'][number]>, ref.id, made);
+    if (ref.kind === 'seating') nameCopiedSeats(layout, copy as Draft<Seating>, ref.id);
     list.splice(at + 1, 0, copy as never);
     if (ref.kind === 'microphone' || ref.kind === 'loudspeaker') copySends(draft, schemeId, ref, made);
   });
@@ -161,8 +163,23 @@ function freeLetter(schemes: readonly { id: string }[]): string {
   return freeId(schemes, 'A1');
 }
 
-/** Seat ids are unique over the venue: a copied list's seats take the copy's id, a block's are named by it anyway. */
-function renameSeats(part: Draft<Layout['venue']['seating'][number]>, from: string, to: string): void {
+/** Seat ids are unique over the venue: a copied list's seats are numbered under its id, a block's are named by it anyway. */
+function nameCopiedSeats(layout: Layout, copy: Draft<Seating>, from: string): void {
+  if (copy.kind === 'block') {
+    renameSeats(copy, from, copy.id);
+    return;
+  }
+  const taken = new Set(seatsOf(layout.venue.seating).map((seat) => seat.id));
+  let number = 0;
+  for (const seat of copy.seats) {
+    do number++;
+    while (taken.has(`${copy.id}-${number}`));
+    seat.id = `${copy.id}-${number}`;
+  }
+}
+
+/** What is named after its block or list is renamed with it. */
+function renameSeats(part: Draft<Seating>, from: string, to: string): void {
   const renamed = (id: string) => (id.startsWith(from) ? to + id.slice(from.length) : `${to}-${id}`);
   if (part.kind === 'block') part.omit = part.omit.map(renamed);
   else for (const seat of part.seats) seat.id = renamed(seat.id);
@@ -182,7 +199,7 @@ export function rename(layout: Layout, schemeId: string, ref: Ref, id: string): 
     const list = listOf(draft, schemeId, ref.kind);
     const item = list?.find((candidate) => candidate.id === ref.id);
     if (list === null || item === undefined || id === '' || list.some((other) => other.id === id)) return;
-    if (ref.kind === 'seating') renameSeats(item as Draft<Layout['venue']['seating'][number]>, ref.id, id);
+    if (ref.kind === 'seating') renameSeats(item as Draft<Seating>, ref.id, id);
     item.id = id;
     const { kind } = ref;
     if (kind === 'finish') for (const face of draft.venue.faces) if (face.finish === ref.id) face.finish = id;

@@ -26,7 +26,7 @@ export const cautionAt = (path: string, found: string, expected: string, remedy:
 export function sayProblem(problem: Problem): string {
   const place = problem.path === '' ? '' : `${problem.path}: `;
   const parts = [problem.found, problem.expected, problem.remedy].filter((part) => part !== '');
-  return `${place}${parts.join('; ')}.`;
+  return `${place}${parts.join('; ')}.`.replace(/\?\.$/, '?');
 }
 
 /** A value, or the problems that kept it from being one. Problems beside a value are cautions. */

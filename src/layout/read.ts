@@ -55,8 +55,11 @@ function refuseEnvelope(value: unknown): Problem | null {
 function problemOfIssue(issue: v.BaseIssue<unknown>): Problem {
   const path = pathOf(issue);
   const expected = expectedOf(issue);
-  // Valibot reports a missing key as an undefined input at that key.
-  if (issue.input === undefined) return errorAt(path, 'not given', `expected ${expected}`, 'add it');
+  // Valibot reports a missing key as an undefined input at that key, with the message of the object it belongs to.
+  if (issue.input === undefined) {
+    const owner = issue.message.startsWith('Invalid ') ? '' : `it belongs to ${issue.message}`;
+    return errorAt(path, 'not given', owner, 'add it');
+  }
   return errorAt(path, foundOf(issue), `expected ${expected}`, '');
 }
 

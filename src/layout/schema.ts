@@ -56,6 +56,7 @@ const face = v.object(
     corners: v.pipe(
       v.array(point, 'a list of corners'),
       v.minLength(3, 'three or more corners, in order round the face'),
+      v.maxLength(1000, 'at most 1000 corners'),
     ),
     sides: v.optional(v.picklist([1, 2], '1 (part of the shell) or 2 (free-standing)'), 1),
   },
@@ -197,8 +198,8 @@ const scheme = v.object(
   'a scheme: id, label, microphones, loudspeakers, routing, system',
 );
 
-/** Larger devices than this are slips of the unit, and their patterns would take minutes to compute. */
-const size = (what: string) => positive(3, `${what} in metres`);
+/** Anything larger or smaller is a slip of the unit: patterns would take minutes, or be lost in rounding. */
+const size = (what: string) => between(0.001, 3, `${what} in metres`);
 const angle = positive(360, 'an angle in degrees');
 const alpha = between(0, 1, 'a pattern coefficient');
 
@@ -223,7 +224,7 @@ const pattern = v.variant('type', [
     type: v.literal('column'),
     drivers: whole(1, 200, 'a number of drivers'),
     spacing: size('a driver spacing'),
-    steer: v.optional(between(-60, 60, 'a steering angle in degrees'), 0),
+    steer: v.optional(between(-89, 89, 'a steering angle in degrees'), 0),
     sphere: size('a sphere diameter'),
     cap: size('a cap diameter'),
   }),

@@ -90,7 +90,7 @@ function talkerPrediction(
     ownSeat,
     headroom: scheme.loudspeakers.map((_, l) => headroom(scheme, figures.working, l)),
     proposedDelayMs: Array.from(figures.holdS, (seconds) => (Number.isNaN(seconds) ? null : 1000 * seconds)),
-    uniformity: uniformity(figures.room.totalDba, ownSeat, loop.point.workingGainDb !== null),
+    uniformity: uniformity(figures.room.totalDba, ownSeat),
   };
 }
 
@@ -108,9 +108,9 @@ function headroom(scheme: PreparedScheme, working: Float64Array, l: number): Tal
 }
 
 /** Spread (max − min) and population standard deviation of the total level over judged seats. */
-function uniformity(totalDba: Float64Array, ownSeat: Uint8Array, sounding: boolean): TalkerPrediction['uniformity'] {
+function uniformity(totalDba: Float64Array, ownSeat: Uint8Array): TalkerPrediction['uniformity'] {
   const levels = totalDba.filter((level, seat) => !ownSeat[seat] && Number.isFinite(level));
-  if (levels.length === 0 || !sounding) return { spreadDb: null, deviationDb: null };
+  if (levels.length === 0) return { spreadDb: null, deviationDb: null };
   const mean = levels.reduce((sum, level) => sum + level, 0) / levels.length;
   const square = levels.reduce((sum, level) => sum + (level - mean) ** 2, 0) / levels.length;
   // Sorting, because a large venue has more seats than a call takes arguments.

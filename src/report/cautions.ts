@@ -58,9 +58,10 @@ function ofPrediction(layout: Layout, scheme: Scheme, prediction: Prediction): s
       }
     });
   }
-  const loudest = Math.max(
-    ...predicted.talkers.flatMap((talker) => Array.from(talker.room.totalDba).filter(Number.isFinite)),
-  );
+  let loudest = Number.NEGATIVE_INFINITY;
+  for (const talker of predicted.talkers) {
+    for (const levelDba of talker.room.totalDba) if (levelDba > loudest) loudest = levelDba;
+  }
   if (loudest >= 85) {
     const minutes = exposureMinutes(loudest);
     said.push(

@@ -10,6 +10,9 @@ export function figure(value: number | null, digits = 1): string {
   return value < 0 && Number(shown) !== 0 ? MINUS + shown : shown;
 }
 
+/** A setting as it was typed: 6, 7.5. */
+export const plainFigure = (value: number): string => String(Number(value.toFixed(2))).replace('-', MINUS);
+
 /** A figure whose sign carries meaning: plus as well as minus. */
 export function signedFigure(value: number | null, digits = 1): string {
   const shown = figure(value, digits);

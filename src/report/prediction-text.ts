@@ -3,7 +3,7 @@ import type { Problem } from '../layout/problem';
 import type { Layout, Scheme } from '../layout/schema';
 import { type Prediction, RUNGS, type Rung, type SchemePrediction } from '../predict/prediction';
 import { cautions, NOT_MODELLED } from './cautions';
-import { figure, marginFigure, octaveFigure } from './figures';
+import { figure, marginFigure, octaveFigure, plainFigure } from './figures';
 import { RUNG_LABELS, seatStanding } from './quantities';
 import { plainSentence, verdict } from './verdict';
 
@@ -27,8 +27,8 @@ export function predictionText(layout: Layout, prediction: Prediction, problems:
 function sayNeed(layout: Layout): string {
   const { need } = layout;
   return need.kind === 'distance'
-    ? `every seat to hear as if at ${Number(need.metres.toFixed(2))} m`
-    : `every seat to hear ${figure(need.signalToNoise, 0)} dB above the noise`;
+    ? `every seat to hear as if at ${plainFigure(need.metres)} m`
+    : `every seat to hear ${plainFigure(need.signalToNoise)} dB above the noise`;
 }
 
 function schemeText(

@@ -42,8 +42,8 @@ export function seatsCsv(layout: Layout, prediction: Prediction): string {
 
 const csvFigure = (value: number): string => (Number.isFinite(value) ? String(Number(value.toFixed(4))) : '');
 
-/** Quoted where it must be; a leading = + - @ of a text is kept from being taken for a formula. */
+/** Quoted where it must be; a text that begins with = + - @ is kept from being taken for a formula. */
 export function csvCell(value: string): string {
-  const guarded = /^[=+@\t]|^-(?!\d)/.test(value) ? `'${value}` : value;
+  const guarded = /^[=+\-@\t\r]/.test(value) && !/^-?\d+(\.\d+)?$/.test(value) ? `'${value}` : value;
   return /[",\r\n]/.test(guarded) ? `"${guarded.replaceAll('"', '""')}"` : guarded;
 }

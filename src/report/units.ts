@@ -4,6 +4,7 @@ import { figure, NO_FIGURE } from './figures';
 export type Units = 'metric' | 'imperial';
 
 const M_PER_INCH = 0.0254;
+const M_PER_FOOT = 12 * M_PER_INCH;
 /** Inches are shown to this part. */
 const INCH_PARTS = 8;
 
@@ -44,44 +45,53 @@ export function parseLength(text: string, units: Units): number | null {
   if (rest === '') return null;
   for (const [i, fraction] of FRACTIONS.entries()) if (i > 0) rest = rest.replace(fraction, ` ${i}/8`);
   let total = 0;
-  let found = false;
   let feetGiven = false;
-  const piece =
-    /^\s*(\d+(?:\.\d*)?|\.\d+)(?:\s+(\d+)\s*\/\s*(\d+)|\s*\/\s*(\d+))?\s*(mm|cm|m|ft|feet|in|inches|'|′|"|″)?\s*-?/;
+  let complete = false;
   while (rest.trim() !== '') {
-    const match = piece.exec(rest);
-    if (match === null) return null;
-    let value = Number(match[1]);
-    if (match[2] !== undefined) value += Number(match[2]) / Number(match[3]);
-    if (match[4] !== undefined) value /= Number(match[4]);
-    const scale = scaleOf(match[5], units, feetGiven);
-    if (scale === M_PER_INCH * 12) feetGiven = true;
+    const match = PIECE.exec(rest);
+    // A number of no unit says all there is to say, but for the inches after feet: "12 34" is no length.
+    if (match === null || complete) return null;
+    const [piece, number, numerator, denominator, divisor, unit] = match;
+    let value = Number(number);
+    if (numerator !== undefined) value += Number(numerator) / Number(denominator);
+    if (divisor !== undefined) value /= Number(divisor);
+    const first: boolean = total === 0 && !feetGiven;
+    const scale: number | null = unit === undefined ? plainScale(units, first, feetGiven) : SCALES[unit];
+    if (scale === null) return null;
+    feetGiven = scale === M_PER_FOOT;
+    complete = unit === undefined && !feetGiven;
     total += value * scale;
-    found = true;
-    rest = rest.slice(match[0].length);
+    rest = rest.slice(piece.length);
+    // 5'-3" is how drawings write it.
+    if (feetGiven && rest.trim() !== '-') rest = rest.replace(/^\s*-/, '');
   }
-  return found && Number.isFinite(total) ? (negative ? -total : total) : null;
+  return Number.isFinite(total) ? (negative ? -total : total) : null;
 }
 
-function scaleOf(unit: string | undefined, units: Units, feetGiven: boolean): number {
-  switch (unit) {
-    case 'mm':
-      return 0.001;
-    case 'cm':
-      return 0.01;
-    case 'm':
-      return 1;
-    case 'in':
-    case 'inches':
-    case '"':
-    case '″':
-      return M_PER_INCH;
-    case undefined:
-      if (units === 'metric') return 1;
-      return feetGiven ? M_PER_INCH : 12 * M_PER_INCH;
-    default:
-      return 12 * M_PER_INCH;
-  }
+const PIECE =
+  /^\s*(\d+(?:\.\d*)?|\.\d+)(?:\s+(\d+)\s*\/\s*(\d+)|\s*\/\s*(\d+))?\s*(mm|cm|m|feet|foot|ft|inches|inch|in|'|′|"|″)?/;
+
+const SCALES: Readonly<Record<string, number>> = {
+  mm: 0.001,
+  cm: 0.01,
+  m: 1,
+  ft: M_PER_FOOT,
+  foot: M_PER_FOOT,
+  feet: M_PER_FOOT,
+  "'": M_PER_FOOT,
+  '′': M_PER_FOOT,
+  in: M_PER_INCH,
+  inch: M_PER_INCH,
+  inches: M_PER_INCH,
+  '"': M_PER_INCH,
+  '″': M_PER_INCH,
+};
+
+/** Scale of a number without a unit: the unit shown where it stands first, inches after feet, else none. */
+function plainScale(units: Units, first: boolean, feetGiven: boolean): number | null {
+  if (feetGiven) return M_PER_INCH;
+  if (!first) return null;
+  return units === 'metric' ? 1 : M_PER_FOOT;
 }
 
 /** A plain number as typed, with a true minus or a comma accepted; null where it is none. */

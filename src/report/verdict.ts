@@ -2,7 +2,7 @@ import { NOMINAL_HZ } from '../acoustics/bands';
 import type { Ref } from '../layout/ref';
 import type { Layout, Scheme } from '../layout/schema';
 import type { Prediction, SchemePrediction } from '../predict/prediction';
-import { amountFigure, count, figure, octaveFigure } from './figures';
+import { amountFigure, count, figure, octaveFigure, plainFigure } from './figures';
 import { summarise } from './quantities';
 
 /** A piece of a sentence; one with a `ref` is a link to the thing it names. */
@@ -33,7 +33,7 @@ export function verdict(layout: Layout, scheme: Scheme, prediction: Prediction, 
   const band = limiting?.loop.room.limitingBand ?? -1;
   const sentence: Said[] = [
     { text: 'Kept ' },
-    { text: `${figure(scheme.system.stabilityMargin, 0)} dB`, ref: { kind: 'system', id: '' } },
+    { text: `${plainFigure(scheme.system.stabilityMargin)} dB`, ref: { kind: 'system', id: '' } },
     { text: ` below ringing at ${octaveFigure(NOMINAL_HZ[band])}, ` },
     name,
     { text: ' serves ' },
