@@ -1,6 +1,7 @@
 import { sayProblem } from '../layout/problem';
 import { refOfPath } from '../layout/problem-ref';
 import { type Said, verdict } from '../report/verdict';
+import { SHORT_FILTER } from '../seats/filter';
 import { currentScheme, useSession, useStale } from '../session/session';
 
 /** The sentence across the top, always true for what is shown. Each noun selects the thing it names. */
@@ -68,7 +69,7 @@ function Piece({ said }: { said: Said }) {
   if (ref === undefined && filter === undefined) return said.text;
   const follow = () => {
     const session = useSession.getState();
-    if (filter === 'short') session.setSeatFilter(session.seatFilter === 'short' ? '' : 'short');
+    if (filter === 'short') session.setSeatFilter(session.seatFilter === SHORT_FILTER ? '' : SHORT_FILTER);
     if (ref !== undefined) session.select(ref);
   };
   return (

@@ -2,6 +2,7 @@ import { NOMINAL_HZ } from '../acoustics/bands';
 import { canCopy, duplicate, remove, whyKept } from '../layout/edits';
 import { octaveFigure } from '../report/figures';
 import { QUANTITIES } from '../report/quantities';
+import { SHORT_FILTER } from '../seats/filter';
 import { type Session, useSession } from '../session/session';
 import { openFile, saveFile } from './files';
 import { openVenue, VENUES } from './venues';
@@ -142,7 +143,7 @@ function showActions(): Action[] {
       label: `Show the ${octaveFigure(frequencyHz)} octave`,
       run: () => session().showOctave(octave),
     })),
-    { id: 'short', label: 'Show only the seats that fall short', run: () => session().setSeatFilter('short') },
+    { id: 'short', label: 'Show only the seats that fall short', run: () => session().setSeatFilter(SHORT_FILTER) },
     { id: 'all-seats', label: 'Show all seats', run: () => session().setSeatFilter('') },
   ];
 }
