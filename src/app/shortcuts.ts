@@ -38,7 +38,7 @@ function keysOf(event: KeyboardEvent): string {
 /** A field with text that is not settled yet keeps its own undo. */
 function isTyping(target: EventTarget | null): boolean {
   return (
-    target instanceof HTMLTextAreaElement || (target instanceof HTMLInputElement && target.dataset.typing === 'true')
+    target instanceof HTMLTextAreaElement || (target instanceof HTMLInputElement && target.dataset.dirty === 'true')
   );
 }
 

@@ -14,6 +14,8 @@ export interface ChoiceProps {
   name?: string;
   value: string;
   options: readonly Option[];
+  /** Shown where nothing is chosen. */
+  placeholder?: string;
   className?: string;
   onChange: (id: string) => void;
 }

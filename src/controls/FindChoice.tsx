@@ -3,18 +3,16 @@ import { Button, ComboBox, Input } from 'react-aria-components';
 import { type ChoiceProps, OptionList } from './Choice';
 
 /** One of many: type a part of its name, or open the list. Leaving keeps what was chosen. */
-export function FindChoice({ label, name, value, options, className = '', onChange }: ChoiceProps) {
+export function FindChoice({ label, name, value, options, placeholder, className = '', onChange }: ChoiceProps) {
   const chosen = options.find((option) => option.id === value);
-  const listed = chosen === undefined ? [{ id: value, label: value }, ...options] : options;
+  const listed = chosen === undefined && value !== '' ? [{ id: value, label: value }, ...options] : options;
   const [open, setOpen] = useState(false);
   return (
     <ComboBox
-      // A value changed from elsewhere starts the field anew, so that it never shows a name that is no longer chosen.
-      key={`${value}\n${chosen?.label ?? ''}`}
       className={`field ${className}`}
       aria-label={label}
       defaultItems={listed}
-      defaultValue={value}
+      value={value === '' ? null : value}
       onOpenChange={setOpen}
       onChange={(key) => key !== null && key !== value && onChange(String(key))}
     >
@@ -24,7 +22,12 @@ export function FindChoice({ label, name, value, options, className = '', onChan
             {name}
           </span>
         )}
-        <Input className="txt" onFocus={(event) => event.target.select()} data-typing={open || undefined} />
+        <Input
+          className="txt"
+          placeholder={placeholder}
+          onFocus={(event) => event.target.select()}
+          data-dirty={open || undefined}
+        />
         <Button className="field-open" aria-label={`${label}, all`}>
           <i aria-hidden="true" />
         </Button>

@@ -1,4 +1,4 @@
-import { type FocusEvent, type KeyboardEvent, useId, useRef, useState } from 'react';
+import { type FocusEvent, type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
 import { figure, NO_FIGURE } from '../report/figures';
 import { nudge, type QuantityRule, readQuantity, stepsOfKey } from './quantity-text';
 import { useScrub } from './use-scrub';
@@ -42,7 +42,14 @@ export function QuantityField(props: QuantityFieldProps) {
   const format = props.format ?? ((shown: number) => figure(shown, digits));
   const say = (shown: number) => `${format(shown)}${unit === '' || unit === '°' ? unit : ` ${unit}`}`;
   const { min, max, whole = false, parse } = props;
-  const rule: QuantityRule = { min, max, whole, nullable, say, ...(parse && { parse }) };
+  const rule: QuantityRule = {
+    min,
+    max,
+    whole,
+    nullable,
+    say: (end) => say(end).replace(/\.0+(?= |$)/, ''),
+    ...(parse && { parse }),
+  };
 
   const whyId = useId();
   const [typed, setTyped] = useState<string | null>(null);
@@ -50,11 +57,21 @@ export function QuantityField(props: QuantityFieldProps) {
   // True from the first live value to the one that settles it; a ref, because blur may follow in the same event.
   const underWay = useRef(false);
   const input = useRef<HTMLInputElement>(null);
+  const latest = useRef(props);
+  latest.current = props;
 
   const send = (next: number | null, phase: Phase) => {
     underWay.current = phase === 'live';
     props.onChange(next, phase);
   };
+  // A field that goes away under someone's hands (another thing was selected) settles what it has sent.
+  useEffect(
+    () => () => {
+      if (underWay.current) latest.current.onChange(latest.current.value, 'commit');
+      underWay.current = false;
+    },
+    [],
+  );
   const takeBack = () => {
     if (underWay.current) props.onCancel();
     underWay.current = false;
@@ -108,6 +125,8 @@ export function QuantityField(props: QuantityFieldProps) {
     else return;
     event.preventDefault();
     event.stopPropagation();
+    // Ready to be typed over, once the value is drawn.
+    if (event.key !== 'Enter' || typed !== null) requestAnimationFrame(() => input.current?.select());
   };
   const shown = typed ?? (value === null ? '' : format(value));
   return (
@@ -132,7 +151,7 @@ export function QuantityField(props: QuantityFieldProps) {
           aria-valuetext={value === null ? (nullable ? none : 'no value') : say(value)}
           aria-invalid={why !== null}
           aria-describedby={why === null ? undefined : whyId}
-          data-typing={typed !== null || undefined}
+          data-dirty={typed !== null || undefined}
           disabled={props.disabled}
           placeholder={none}
           value={shown}
@@ -141,7 +160,7 @@ export function QuantityField(props: QuantityFieldProps) {
           onBlur={settle}
           onKeyDown={onKeyDown}
         />
-        {unit !== '' && <i className="u">{unit}</i>}
+        {unit !== '' && (shown !== '' || /\d/.test(none)) && <i className="u">{unit}</i>}
       </span>
       {why !== null && (
         <em className="field-why" id={whyId} role="alert">

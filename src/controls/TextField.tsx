@@ -1,4 +1,4 @@
-import { type KeyboardEvent, useId, useRef, useState } from 'react';
+import { type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
 import type { Phase } from './QuantityField';
 
 export interface TextFieldProps {
@@ -25,12 +25,15 @@ export function TextField(props: TextFieldProps) {
   const [typed, setTyped] = useState<string | null>(null);
   const [why, setWhy] = useState<string | null>(null);
   const underWay = useRef(false);
+  // What is typed and not settled, at once: a field may go away before it is drawn again.
+  const pending = useRef(false);
 
   const takeBack = () => {
     if (underWay.current) props.onCancel?.();
     underWay.current = false;
   };
   const type = (text: string) => {
+    pending.current = true;
     setTyped(text);
     const reason = refuse?.(text) ?? null;
     setWhy(text === '' ? null : reason);
@@ -41,18 +44,24 @@ export function TextField(props: TextFieldProps) {
     }
   };
   const settle = () => {
-    if (typed === null) return;
+    if (typed === null || !pending.current) return;
     const reason = refuse?.(typed) ?? null;
     if (reason !== null) return setWhy(reason);
+    pending.current = false;
     if (typed !== value || underWay.current) props.onChange(typed, 'commit');
     underWay.current = false;
     setTyped(null);
     setWhy(null);
   };
+  // A field that goes away under someone's hands (another thing was selected) keeps what was typed.
+  const settleLast = useRef(settle);
+  settleLast.current = settle;
+  useEffect(() => () => settleLast.current(), []);
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.key === 'Enter' && !(multiline && !event.ctrlKey && !event.metaKey)) settle();
     else if (event.key === 'Escape' && typed !== null) {
       takeBack();
+      pending.current = false;
       setTyped(null);
       setWhy(null);
     } else return;
@@ -60,10 +69,9 @@ export function TextField(props: TextFieldProps) {
     event.stopPropagation();
   };
   const shared = {
-    'aria-label': label,
     'aria-invalid': why !== null,
     'aria-describedby': why === null ? undefined : whyId,
-    'data-typing': typed !== null || undefined,
+    'data-dirty': typed !== null || undefined,
     className: 'txt',
     placeholder: props.placeholder,
     value: typed ?? value,
@@ -71,7 +79,11 @@ export function TextField(props: TextFieldProps) {
     onKeyDown,
   };
   return (
-    <label className={`field ${multiline ? 'tall' : ''} ${props.className ?? ''}`} data-invalid={why !== null || undefined}>
+    // biome-ignore lint/a11y/noLabelWithoutControl: the field in it is one of two.
+    <label
+      className={`field ${multiline ? 'tall' : ''} ${props.className ?? ''}`}
+      data-invalid={why !== null || undefined}
+    >
       <span>
         {name !== undefined && (
           <span className="field-name" aria-hidden="true">
@@ -79,9 +91,16 @@ export function TextField(props: TextFieldProps) {
           </span>
         )}
         {multiline ? (
-          <textarea {...shared} rows={3} onChange={(event) => type(event.target.value)} />
+          <textarea {...shared} aria-label={label} rows={3} onChange={(event) => type(event.target.value)} />
         ) : (
-          <input {...shared} type="text" autoComplete="off" spellCheck={false} onChange={(event) => type(event.target.value)} />
+          <input
+            {...shared}
+            aria-label={label}
+            type="text"
+            autoComplete="off"
+            spellCheck={false}
+            onChange={(event) => type(event.target.value)}
+          />
         )}
       </span>
       {why !== null && (
