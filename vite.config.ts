@@ -37,6 +37,8 @@ export default defineConfig({
           globalSetup: 'test/support/server.ts',
           fileParallelism: false,
           testTimeout: 90_000,
+          // A machine without a GPU draws on the same cores that compute.
+          expect: { poll: { timeout: 15_000 } },
           hookTimeout: 90_000,
         },
       },

@@ -6,7 +6,7 @@ import { describe, expect, test } from 'vitest';
 import { openPage } from '../support/open-page';
 
 const verdict = (page: Page) => page.locator('.verdict');
-const row = (page: Page, seat: string) => page.locator(`[role="row"][data-seat="${seat}"]`);
+const row = (page: Page, seat: string) => page.locator(`.seats tr[data-seat="${seat}"]`);
 const room = (page: Page) => page.locator('.room [data-renderer]');
 
 /** Opens the page and waits for the worked venue's prediction and its drawing. */
@@ -19,7 +19,7 @@ async function openVenue(options: Parameters<typeof openPage>[0] = {}) {
 
 const sentence = (page: Page) => page.locator('.verdict-sentence').innerText();
 const margins = (page: Page) =>
-  page.locator('[role="row"][data-seat]').evaluateAll((rows) => rows.map((r) => r.textContent));
+  page.locator('.seats tr[data-seat]').evaluateAll((rows) => rows.map((r) => r.textContent));
 
 /** Chooses an item of the list by its id. */
 async function choose(page: Page, id: string) {
@@ -234,7 +234,7 @@ describe('the sheet', () => {
   test('draws the plan where there is no WebGL at all, and selects in it', async () => {
     const { page } = await openVenue({ disable3d: true, declared: [/WebGL/] });
     expect(await room(page).getAttribute('data-renderer')).toBe('drawing');
-    await page.locator('.room [data-seat="P-2-1"]').first().click({ force: true });
+    await page.locator('.room [data-seat="P-2-1"]').first().click();
     await expect.poll(() => row(page, 'P-2-1').getAttribute('aria-selected')).toBe('true');
   });
 
