@@ -1,9 +1,10 @@
 import { NOMINAL_HZ } from '../acoustics/bands';
-import { canCopy, duplicate, remove, whyKept } from '../layout/edits';
+import { canCopy, duplicate, remove, setDelays, whyKept } from '../layout/edits';
 import { octaveFigure } from '../report/figures';
+import { proposedDelays } from '../report/proposed-delays';
 import { QUANTITIES } from '../report/quantities';
 import { SHORT_FILTER } from '../seats/filter';
-import { type Session, useSession } from '../session/session';
+import { currentPrediction, type Session, useSession } from '../session/session';
 import { openFile, saveFile } from './files';
 import { openVenue, VENUES } from './venues';
 
@@ -81,6 +82,12 @@ function schemeActions(): Action[] {
           remove(layout, schemeId, { kind: 'scheme', id: schemeId }),
         ),
     },
+    {
+      id: 'delays',
+      label: 'Use all proposed delays',
+      unavailable: (now) => (currentPrediction(now) === null ? 'Not predicted yet.' : null),
+      run: useProposedDelays,
+    },
     { id: 'system', label: 'Change the system settings', run: () => session().select({ kind: 'system', id: '' }) },
     { id: 'routing', label: 'Change the routing', run: () => session().select({ kind: 'routing', id: '' }) },
     { id: 'venue', label: 'Change the venue, noise, air or need', run: () => session().select(null) },
@@ -94,6 +101,15 @@ export function duplicateScheme(): void {
   if (copy === null) return;
   session().edit(`Duplicate scheme ${schemeId}`, () => copy.layout);
   session().showScheme(copy.ref.id);
+}
+
+/** Sets every loudspeaker to the delay that keeps the talker shown, or every talker, first. */
+function useProposedDelays(): void {
+  const prediction = currentPrediction(session());
+  if (prediction === null) return;
+  const { schemeId, talkerId } = session();
+  const delays = proposedDelays(prediction, talkerId);
+  session().edit('Use all proposed delays', (layout) => setDelays(layout, schemeId, delays));
 }
 
 function selectionActions(): Action[] {

@@ -41,6 +41,15 @@ export function editLoudspeaker(
   });
 }
 
+/** Sets the delays of a scheme's loudspeakers in ms, in their order; null leaves one as it is. */
+export function setDelays(layout: Layout, schemeId: string, delaysMs: readonly (number | null)[]): Layout {
+  return editScheme(layout, schemeId, (scheme) => {
+    scheme.loudspeakers.forEach((loudspeaker, l) => {
+      loudspeaker.delay = delaysMs[l] ?? loudspeaker.delay;
+    });
+  });
+}
+
 export function editTalker(layout: Layout, id: string, change: (talker: Draft<Talker>) => void): Layout {
   return produce(layout, (draft) => {
     const talker = draft.venue.talkers.find((candidate) => candidate.id === id);

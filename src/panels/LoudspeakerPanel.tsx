@@ -1,8 +1,9 @@
 import { Action } from '../controls/Action';
 import { QuantityField } from '../controls/QuantityField';
-import { editLoudspeaker } from '../layout/edits';
+import { editLoudspeaker, setDelays } from '../layout/edits';
 import type { Loudspeaker } from '../layout/schema';
 import { figure } from '../report/figures';
+import { proposedDelays } from '../report/proposed-delays';
 import { lengthFigure, lengthUnit } from '../report/units';
 import { useLayout, useScheme, useSchemePrediction, useSession } from '../session/session';
 import { bind, type DeviceRef, editOnce } from './binding';
@@ -88,6 +89,11 @@ function Figures({ loudspeaker }: { loudspeaker: Loudspeaker }) {
         draft.delay = Math.min(DELAY_MS.max, Math.ceil(10 * proposedMs) / 10);
       }),
     );
+  const adoptAll = () => {
+    if (prediction === null) return;
+    const delays = proposedDelays(prediction, talkerId);
+    editOnce('Use all proposed delays', (before) => setDelays(before, scheme.id, delays));
+  };
   return (
     <dl className="said">
       {met !== null && (
@@ -102,6 +108,9 @@ function Figures({ loudspeaker }: { loudspeaker: Loudspeaker }) {
               Delay that keeps {talkerLabel(layout, delay.talkerId)} first by {figure(scheme.system.delayHold, 0)} ms{' '}
               <Action look="use" label="Use this delay" onPress={() => use(delay.proposedMs)}>
                 Use
+              </Action>{' '}
+              <Action look="use" label="Use the proposed delay of every loudspeaker" onPress={adoptAll}>
+                Use all
               </Action>
             </>
           }

@@ -6,6 +6,7 @@ import BandChart from '../controls/BandChart';
 import { type Contribution, GOOD_ABSORBER, studyDecay } from '../predict/studies/decay';
 import { figure, octaveFigure } from '../report/figures';
 import { useLayout, useSession } from '../session/session';
+import './room-charts.css';
 
 const BANDS = NOMINAL_HZ.map((hz) => (hz < 1000 ? String(hz) : `${hz / 1000} k`));
 const MOST_ROWS = 8;
@@ -17,8 +18,8 @@ export function RoomCharts() {
   return (
     <>
       <section className="item-section" aria-label="Decay by octave">
-        <h3 className="charts-title">
-          Decay<span className="u">s</span>
+        <h3>
+          Decay <span>s</span>
         </h3>
         <BandChart
           label="Decay by octave"
@@ -45,7 +46,7 @@ function Absorption({ decayS }: { decayS: Float64Array }) {
   const octaveName = octaveFigure(NOMINAL_HZ[octave]);
   return (
     <section className="item-section" aria-label="What absorbs">
-      <h3 className="charts-title">What absorbs at {octaveName}</h3>
+      <h3>What absorbs at {octaveName}</h3>
       <table className="charts-absorption">
         <thead>
           <tr>
@@ -115,8 +116,8 @@ function VoiceAndNoise() {
   }
   return (
     <section className="item-section" aria-label="Voice and noise by octave">
-      <h3 className="charts-title">
-        Voice and noise<span className="u">dB</span>
+      <h3>
+        Voice and noise <span>dB</span>
       </h3>
       <BandChart
         label="Voice and noise by octave"

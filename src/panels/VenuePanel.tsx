@@ -9,6 +9,7 @@ import { useLayout, useSession } from '../session/session';
 import { bind, editOnce } from './binding';
 import { LengthField, OctaveFields, OctaveFigures, Row, Said } from './Fields';
 import { Ways } from './ItemHead';
+import { RoomCharts } from './RoomCharts';
 
 const AIR = [
   { key: 'temperature', name: 'temp', label: 'Temperature', unit: '°C', min: -50, max: 60, step: 1 },
@@ -101,6 +102,7 @@ export function VenuePanel() {
       </div>
       <NoiseSection />
       <DecaySection />
+      <RoomCharts />
     </>
   );
 }

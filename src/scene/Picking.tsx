@@ -3,7 +3,7 @@ import { type RefObject, useEffect } from 'react';
 import { type Camera, type Mesh, Raycaster, Vector2, Vector3 } from 'three';
 import type { Ref } from '../layout/ref';
 import type { Vec3 } from '../layout/schema';
-import { pinHeightM } from './SeatPins';
+import { isPinned, PIN_HEIGHT_M } from './SeatPins';
 import { pinOf } from './seat-geometry';
 import type { RoomScene } from './use-room-scene';
 
@@ -131,8 +131,8 @@ function nearestSmall(
   for (const { device } of scene.microphones) consider({ kind: 'microphone', id: device.id }, device.position);
   for (const talker of scene.layout.venue.talkers) consider({ kind: 'talker', id: talker.id }, talker.position);
   scene.seats.forEach((seat, index) => {
-    if (!scene.figures.short[index]) return;
-    consider({ kind: 'seat', id: seat.id }, pinOf(seat, pinHeightM(scene.figures.shortCount))[1]);
+    if (!isPinned(scene.figures, index)) return;
+    consider({ kind: 'seat', id: seat.id }, pinOf(seat, PIN_HEIGHT_M)[1]);
   });
   return nearest;
 }

@@ -15,7 +15,7 @@ import Labels from './Labels';
 import { labelList } from './label-list';
 import Picking, { type PickTargets } from './Picking';
 import RoomShell from './RoomShell';
-import SeatPins, { pinHeightM } from './SeatPins';
+import SeatPins, { PIN_HEIGHT_M } from './SeatPins';
 import Seats from './Seats';
 import { pinOf, seatPoints } from './seat-geometry';
 import { placeOfSelection, pointingOf, shotOfView } from './shot-of-view';
@@ -117,9 +117,14 @@ interface RigProps extends RoomCanvasProps {
   onSides: (sides: { east: boolean; north: boolean }) => void;
 }
 
+/** What an orbit keeps free on the right, pixels. */
+const ORBIT_ASIDE_PX = 120;
+
 /** Where the camera stands, from the view chosen and the thing selected. */
-function Rig({ scene, view, rightPx, software, camera, moving, pickedHere, onSides }: RigProps) {
+function Rig({ scene, view, rightPx: asidePx, software, camera, moving, pickedHere, onSides }: RigProps) {
   const size = useThree((three) => three.size);
+  // Seen from a corner the model leaves the legend's corner of the drawing free by itself.
+  const rightPx = view.kind === 'orbit' ? Math.min(asidePx, ORBIT_ASIDE_PX) : asidePx;
   const { shape, selection } = scene;
   const area: FreeArea = useMemo(
     () => ({ widthPx: size.width, heightPx: size.height, rightPx, bottomPx: 0 }),
@@ -187,9 +192,7 @@ function Projector({ scene, wrapper, rightPx, legendPx, labels, elements, card, 
     [size, rightPx, legendPx],
   );
   const worst =
-    figures.worst < 0
-      ? null
-      : pinOf(seats[figures.worst], pinHeightM(figures.shortCount))[figures.short[figures.worst] ? 1 : 0];
+    figures.worst < 0 ? null : pinOf(seats[figures.worst], PIN_HEIGHT_M)[figures.short[figures.worst] ? 1 : 0];
   return (
     <LabelProjector
       labels={labels}

@@ -2,27 +2,30 @@ import { useFrame } from '@react-three/fiber';
 import { useEffect, useMemo, useRef } from 'react';
 import { BufferAttribute, BufferGeometry, CanvasTexture, type Group, type PointsMaterial, Vector3 } from 'three';
 import type { Vec3 } from '../layout/schema';
-import { seatColour } from './seat-figures';
+import { type SeatFigures, seatColour } from './seat-figures';
 import { pinOf } from './seat-geometry';
 import ThinLines from './ThinLines';
 import type { RoomScene } from './use-room-scene';
 
-/** With more short seats than this the pins are kept low and small: a forest hides what it should show. */
-const MANY = 40;
+/** With more short seats than this only the worst carries a pin: a forest hides what it should show. */
+const MANY = 24;
 
 /** From straight above nothing hides a seat, and its pin would only cover it. */
 const STEEP = 0.97;
 
 /** How high above its floor the head of a short seat's pin stands, metres. */
-export const pinHeightM = (shortCount: number): number => (shortCount > MANY ? 1.15 : 1.95);
+export const PIN_HEIGHT_M = 1.95;
 
-/** A pin on every seat that falls short, so that nothing can hide it. */
+/** Whether a seat carries a pin: it falls short, and few do or it is the worst. */
+export const isPinned = ({ short, shortCount, worst }: SeatFigures, index: number): boolean =>
+  short[index] === 1 && (shortCount <= MANY || index === worst);
+
+/** A pin on each seat that falls short, so that nothing can hide it. */
 export default function SeatPins({ scene }: { scene: RoomScene }) {
   const { seats, figures, quantity, colours } = scene;
-  const many = figures.shortCount > MANY;
   const pins = useMemo(() => {
-    const short = seats.flatMap((seat, index) => (figures.short[index] ? [{ seat, index }] : []));
-    const lines = short.map(({ seat }) => pinOf(seat, pinHeightM(figures.shortCount)) as [Vec3, Vec3]);
+    const short = seats.flatMap((seat, index) => (isPinned(figures, index) ? [{ seat, index }] : []));
+    const lines = short.map(({ seat }) => pinOf(seat, PIN_HEIGHT_M) as [Vec3, Vec3]);
     const fills = short.flatMap(
       ({ index }) => seatColour(figures, index, quantity, colours) ?? colours.linear['card-floor'],
     );
@@ -41,15 +44,17 @@ export default function SeatPins({ scene }: { scene: RoomScene }) {
     if (group.current !== null) group.current.visible = looking.z > -STEEP;
   });
   if (pins.heads.length === 0) return null;
-  const sizePx = many ? 9 : 16;
   return (
     <group ref={group}>
       <ThinLines points={pins.lines} colour={colours.css.ink} />
-      <Wedges geometry={geometry} sizePx={sizePx + 4} colour={colours.css.mark} order={5} />
-      <Wedges geometry={geometry} sizePx={sizePx} colour={null} order={6} />
+      <Wedges geometry={geometry} sizePx={HEAD_PX + 4} colour={colours.css.mark} order={5} />
+      <Wedges geometry={geometry} sizePx={HEAD_PX} colour={null} order={6} />
     </group>
   );
 }
+
+/** Size of a pin's head on the screen, pixels. */
+const HEAD_PX = 16;
 
 const looking = new Vector3();
 

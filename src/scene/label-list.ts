@@ -5,7 +5,7 @@ import { figure, marginFigure } from '../report/figures';
 import { lengthText } from '../report/units';
 import type { Aim } from './aim';
 import type { DimensionString } from './floor-marks';
-import { pinHeightM } from './SeatPins';
+import { isPinned, PIN_HEIGHT_M } from './SeatPins';
 import { pinOf } from './seat-geometry';
 import type { RoomScene } from './use-room-scene';
 
@@ -83,13 +83,13 @@ function seatLabels(scene: RoomScene): LabelSpec[] {
       look === 'worst' || quantity.id === 'margin'
         ? `${marginFigure(figures.marginDb[index])} dB`
         : `${figure(figures.value[index], quantity.digits)}${unit}`;
-    const pinned = figures.short[index] === 1;
+    const pinned = isPinned(figures, index);
     return {
       key: `${look}:${id}`,
       look,
       text: figures.judged[index] ? `${id} ${value}` : id,
       name: look === 'worst' ? `Worst seat ${id}, margin ${value}` : `Seat ${id}`,
-      at: pinOf(seats[index], pinned ? pinHeightM(figures.shortCount) : 0.9)[1],
+      at: pinOf(seats[index], pinned ? PIN_HEIGHT_M : 0.9)[1],
       ref: { kind: 'seat', id },
       on: selection?.kind === 'seat' && selection.id === id,
     };
