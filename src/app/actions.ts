@@ -1,7 +1,7 @@
 import { NOMINAL_HZ } from '../acoustics/bands';
 import { canCopy, duplicate, remove, setDelays, whyKept } from '../layout/edits';
 import { octaveFigure } from '../report/figures';
-import { proposedDelays } from '../report/proposed-delays';
+import { proposedDelays } from '../report/loudspeaker-figures';
 import { QUANTITIES } from '../report/quantities';
 import { SHORT_FILTER } from '../seats/filter';
 import { currentPrediction, type Session, useSession } from '../session/session';

@@ -1,6 +1,6 @@
-import { deviceFrame } from '../acoustics/frame';
 import { distanceToFace, type Faces, heightAbove } from '../acoustics/room/faces';
 import { insideShell, openEdges } from '../acoustics/room/shell';
+import { aimDirection } from './aim';
 import { cautionAt, errorAt, type Problem } from './problem';
 import type { Layout, Vec3 } from './schema';
 import type { Seat } from './seating';
@@ -23,12 +23,12 @@ export function checkPlaces(layout: Layout, faces: Faces, seats: readonly Seat[]
   for (const [i, talker] of venue.talkers.entries()) inside(`venue.talkers[${i}].position`, talker.id, talker.position);
   const outside = seats.filter((seat) => !shell(...seat.ear));
   if (outside.length > 0) {
-    const more = outside.length > 1 ? ` and ${outside.length - 1} more` : '';
+    const more = outside.length > 1 ? ` and ${outside.length - 1} more are` : ' is';
     const path = `venue.seating[${outside[0].seating}]`;
     problems.push(
       errorAt(
         path,
-        `seat ${outside[0].id}${more} is outside the room`,
+        `seat ${outside[0].id}${more} outside the room`,
         'ears inside the shell',
         'move the block or omit the seat',
       ),
@@ -85,8 +85,7 @@ function checkHost(layout: Layout, faces: Faces, path: string, device: Hosted): 
     const found = `${device.id} lies ${Math.round(offM * 1000)} mm off ${device.host}`;
     problems.push(cautionAt(`${path}.position`, found, 'a hosted device lies on its face', 'move it onto the plane'));
   }
-  const radians = (degrees: number) => (degrees * Math.PI) / 180;
-  const aim = deviceFrame(radians(device.pan), radians(device.tilt), radians(device.roll));
+  const aim = aimDirection(device);
   const along = [0, 1, 2].reduce((sum, axis) => sum + aim[axis] * faces.normals[3 * face + axis], 0);
   // A free-standing face may be lain on from either side.
   const cosine = faces.twoSided[face] ? Math.abs(along) : along;

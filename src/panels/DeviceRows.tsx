@@ -1,11 +1,11 @@
 import { Action } from '../controls/Action';
 import { Choice } from '../controls/Choice';
 import { FindChoice } from '../controls/FindChoice';
+import { layOn, nearestFace } from '../layout/aim';
 import { findModel, modelsOfKind } from '../layout/catalogue';
 import { facesOf } from '../layout/geometry';
 import type { DeviceKind, Layout, Loudspeaker, Microphone } from '../layout/schema';
 import { useLayout, useSession } from '../session/session';
-import { layOn, nearestFace } from './aim';
 import { changePlaced, type DeviceRef, editOnce } from './binding';
 import { Row } from './Fields';
 

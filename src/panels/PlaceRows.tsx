@@ -1,9 +1,9 @@
 import { useMemo, useRef } from 'react';
 import { QuantityField } from '../controls/QuantityField';
+import { type Aimed, aimMeets, aimsThrough, alongAim, turnTo } from '../layout/aim';
 import { facesOf } from '../layout/geometry';
 import type { Vec3 } from '../layout/schema';
 import { useLayout, useSession } from '../session/session';
-import { type Aimed, aimMeets, aimsThrough, alongAim, turnTo } from './aim';
 import { bind, changePlaced, type DeviceRef, type Placed } from './binding';
 import { LengthField, Row } from './Fields';
 

@@ -1,24 +1,10 @@
 import type { Layout, Talker } from '../layout/schema';
 import type { SchemePrediction, TalkerPrediction } from '../predict/prediction';
+import { least, talkersMeant } from '../report/loudspeaker-figures';
 
 /** A talker's name as people read it. */
 export const talkerLabel = (layout: Layout, id: string): string =>
   layout.venue.talkers.find((talker) => talker.id === id)?.label || id;
-
-/** The talkers whose figures are shown: the one chosen, else all. */
-function talkersMeant(scheme: SchemePrediction, chosen: string | null): TalkerPrediction[] {
-  return scheme.talkers.filter((talker) => chosen === null || talker.id === chosen);
-}
-
-/** The talker of the least figure (or the first), with the figure; null where none has one. */
-function least<T>(talkers: readonly T[], figure: (talker: T) => number | null): { talker: T; value: number } | null {
-  let found: { talker: T; value: number } | null = null;
-  for (const talker of talkers) {
-    const value = figure(talker);
-    if (value !== null && Number.isFinite(value) && (found === null || value < found.value)) found = { talker, value };
-  }
-  return found;
-}
 
 /** The talker whose loop may be raised least, of those meant. */
 export function criticalTalker(scheme: SchemePrediction, chosen: string | null): TalkerPrediction | null {
@@ -52,33 +38,6 @@ export function loopShare(
   const parts = others.map((_, other) => crosspoints[kind === 'microphone' ? own * wide + other : other * wide + own]);
   const share = parts.reduce((sum, part) => sum + part, 0);
   return { share, through: others[parts.indexOf(Math.max(...parts))] ?? '', talkerId: talker.id };
-}
-
-export interface LoudspeakerFigures {
-  delay: { talkerId: string; proposedMs: number } | null;
-  level: { talkerId: string; levelDb: number; headroomDb: number | null; powerW: number | null } | null;
-}
-
-/** What a loudspeaker is asked for: the delay that keeps every talker meant first, and the level of the loudest. */
-export function loudspeakerFigures(scheme: SchemePrediction, chosen: string | null, id: string): LoudspeakerFigures {
-  const l = scheme.loudspeakerIds.indexOf(id);
-  if (l < 0) return { delay: null, level: null };
-  const meant = talkersMeant(scheme, chosen);
-  const negative = (value: number | null | undefined) => (value == null ? null : -value);
-  const latest = least(meant, (talker) => negative(talker.proposedDelayMs[l]));
-  const loudest = least(meant, (talker) => negative(talker.headroom[l]?.levelDb));
-  return {
-    delay: latest === null ? null : { talkerId: latest.talker.id, proposedMs: -latest.value + 0 },
-    level:
-      loudest === null
-        ? null
-        : { talkerId: loudest.talker.id, levelDb: -loudest.value, ...headroomOf(loudest.talker, l) },
-  };
-}
-
-function headroomOf(talker: TalkerPrediction, l: number): { headroomDb: number | null; powerW: number | null } {
-  const { headroomDb, powerW } = talker.headroom[l];
-  return { headroomDb, powerW };
 }
 
 /** The talker nearest to a place, and how far; null where there is none. */

@@ -1,11 +1,11 @@
 import { distanceToFace, type Faces, firstHit } from '../acoustics/room/faces';
 import { insideShell, openEdges } from '../acoustics/room/shell';
+import { aimDirection, turnTo } from '../layout/aim';
 import { add, editLoudspeaker, editMicrophone, editTalker } from '../layout/edits';
 import { facesOf } from '../layout/geometry';
 import type { Ref } from '../layout/ref';
 import type { Layout, Talker, Vec3 } from '../layout/schema';
 import { seatsOf } from '../layout/seating';
-import { aimDirection, turnTo } from './aim';
 
 export type NewKind = 'talker' | 'microphone' | 'loudspeaker' | 'seating';
 

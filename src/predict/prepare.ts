@@ -3,18 +3,19 @@ import { BAND_COUNT } from '../acoustics/bands';
 import { createPattern } from '../acoustics/directivity/create-pattern';
 import { directivityFactors } from '../acoustics/directivity/integrate';
 import type { Pattern } from '../acoustics/directivity/pattern';
-import { deviceFrame } from '../acoustics/frame';
 import { aWeightedDb, powerOfDb } from '../acoustics/level';
 import { highPassPowers } from '../acoustics/loop/filter';
 import { createListener, type Device } from '../acoustics/paths/device';
 import { createPathFinder, type PathFinder, type Source, type Terminal } from '../acoustics/paths/finder';
 import { type RoomField, roomField } from '../acoustics/room/decay';
+import type { Faces } from '../acoustics/room/faces';
 import { shellVolume } from '../acoustics/room/shell';
 import { noiseLevelsOfNr } from '../acoustics/speech/noise';
 import { talkerLevelsDb, VOCAL_EFFORT_DBA } from '../acoustics/speech/spectra';
+import { frameOf } from '../layout/aim';
 import { findModel } from '../layout/catalogue';
 import { facesOf } from '../layout/geometry';
-import type { DeviceKind, DeviceModel, Layout, Scheme, Talker } from '../layout/schema';
+import type { DeviceKind, DeviceModel, Layout, Scheme, Talker, Venue } from '../layout/schema';
 import { type Seat, seatsOf } from '../layout/seating';
 
 /** A seat nearer than this to a talker is the talker's own, metres. */
@@ -98,17 +99,30 @@ function createModelLibrary(soundSpeedMS: number): ModelLibrary {
   };
 }
 
+/** Speed of sound and attenuation of the venue's air. */
+export function airOf({ air }: Pick<Venue, 'air'>): { soundSpeedMS: number; airDbPerM: Float64Array } {
+  return {
+    soundSpeedMS: soundSpeed(air.temperature),
+    airDbPerM: airAttenuationDbPerM({
+      temperatureC: air.temperature,
+      humidityPercent: air.humidity,
+      pressureKPa: air.pressure,
+    }),
+  };
+}
+
+/** The venue's diffuse field with the faces given: its own, or changed ones. */
+export function fieldOf(venue: Venue, faces: Faces): RoomField {
+  const { soundSpeedMS, airDbPerM } = airOf(venue);
+  return roomField(faces, venue.volume ?? shellVolume(faces), airDbPerM, soundSpeedMS, venue.decay);
+}
+
 /** A layout that passed `checkLayout`, ready to compute. */
 export function prepareVenue(layout: Layout): PreparedVenue {
   const { venue } = layout;
-  const soundSpeedMS = soundSpeed(venue.air.temperature);
-  const airDbPerM = airAttenuationDbPerM({
-    temperatureC: venue.air.temperature,
-    humidityPercent: venue.air.humidity,
-    pressureKPa: venue.air.pressure,
-  });
+  const { soundSpeedMS, airDbPerM } = airOf(venue);
   const faces = facesOf(venue);
-  const field = roomField(faces, venue.volume ?? shellVolume(faces), airDbPerM, soundSpeedMS, venue.decay);
+  const field = fieldOf(venue, faces);
   const finder = createPathFinder({ faces, field, airDbPerM, reflectionOrder: venue.reflectionOrder });
   const models = createModelLibrary(soundSpeedMS);
   const noiseLevels = 'nr' in venue.noise ? noiseLevelsOfNr(venue.noise.nr) : Float64Array.from(venue.noise.levels);
@@ -199,14 +213,13 @@ function createDevice(
   models: ModelLibrary,
   faceIndex: ReadonlyMap<string, number> | null,
 ): Device {
-  const radians = (degrees: number) => (degrees * Math.PI) / 180;
   const { pattern, factors } = models.get(model);
   const [x, y, z] = placed.position;
   return {
     x,
     y,
     z,
-    frame: deviceFrame(radians(placed.pan), radians(placed.tilt), radians(placed.roll)),
+    frame: frameOf(placed),
     pattern,
     directivityFactors: factors,
     host: placed.host === null ? -1 : (faceIndex?.get(placed.host) ?? -1),

@@ -4,6 +4,7 @@ import type { Layout, Scheme } from '../layout/schema';
 import { type Prediction, RUNGS, type Rung, type SchemePrediction } from '../predict/prediction';
 import { cautions, NOT_MODELLED } from './cautions';
 import { figure, marginFigure, octaveFigure, plainFigure } from './figures';
+import { loudspeakerFigures, proposedDelays } from './loudspeaker-figures';
 import { RUNG_LABELS, seatStanding } from './quantities';
 import { plainSentence, verdict } from './verdict';
 
@@ -48,6 +49,10 @@ function schemeText(
     '',
     ...loopTable(layout, predicted),
     '',
+    ...loudspeakerTable(scheme, predicted),
+    '',
+    ...levelTable(layout, predicted),
+    '',
     ...worstSeats(prediction, predicted, layout),
     '',
     'Cautions',
@@ -61,7 +66,7 @@ function loopTable(layout: Layout, predicted: SchemePrediction): string[] {
     RUNGS.map((rung: Rung, i) => {
       const loop = talker.loop[rung];
       const band = rung === 'distance' || loop.limitingBand < 0 ? '' : octaveFigure(NOMINAL_HZ[loop.limitingBand]);
-      const label = layout.venue.talkers.find((candidate) => candidate.id === talker.id)?.label || talker.id;
+      const label = nameOf(layout, talker.id);
       return [
         i === 0 ? label : '',
         RUNG_LABELS[rung],
@@ -77,6 +82,40 @@ function loopTable(layout: Layout, predicted: SchemePrediction): string[] {
   return columns([heads, ...rows], [true, true, false, false, false, false, false]);
 }
 
+/** What each loudspeaker is asked for by the loudest talker, and the delay that keeps every talker first. */
+function loudspeakerTable(scheme: Scheme, predicted: SchemePrediction): string[] {
+  const proposed = proposedDelays(predicted, null);
+  const rows = scheme.loudspeakers.map((loudspeaker, l) => {
+    const { level } = loudspeakerFigures(predicted, null, loudspeaker.id);
+    return [
+      loudspeaker.id,
+      figure(level?.levelDb ?? null),
+      figure(level?.headroomDb ?? null),
+      figure(level?.powerW ?? null, 3),
+      figure(loudspeaker.delay),
+      figure(proposed[l]),
+    ];
+  });
+  const heads = ['Loudspeakers', 'dB at 1 m', 'headroom dB', 'power W', 'delay ms', 'proposed ms'];
+  return columns([heads, ...rows], [true, false, false, false, false, false]);
+}
+
+/** How even the total level is over the seats, by talker. */
+function levelTable(layout: Layout, predicted: SchemePrediction): string[] {
+  const rows = predicted.talkers.map((talker) => [
+    nameOf(layout, talker.id),
+    figure(talker.uniformity.spreadDb),
+    figure(talker.uniformity.deviationDb),
+    figure(talker.working.regenerationDb),
+    figure(talker.working.peakAllowanceDb),
+  ]);
+  const heads = ['Level over seats, dB', 'spread', 'deviation', 'regeneration', 'peak allowance'];
+  return columns([heads, ...rows], [true, false, false, false, false]);
+}
+
+const nameOf = (layout: Layout, id: string): string =>
+  layout.venue.talkers.find((talker) => talker.id === id)?.label || id;
+
 function worstSeats(prediction: Prediction, predicted: SchemePrediction, layout: Layout): string[] {
   const order = prediction.seats
     .map((_, seat) => ({ seat, standing: seatStanding(predicted, null, seat) }))
@@ -85,7 +124,7 @@ function worstSeats(prediction: Prediction, predicted: SchemePrediction, layout:
     .slice(0, WORST_SEATS);
   const rows = order.map(({ seat, standing }) => {
     const talker = predicted.talkers[standing.talker];
-    const label = layout.venue.talkers.find((candidate) => candidate.id === talker.id)?.label || talker.id;
+    const label = nameOf(layout, talker.id);
     return [
       prediction.seats[seat].id,
       label,

@@ -1,8 +1,8 @@
 import { Line } from '@react-three/drei';
 import { useMemo } from 'react';
 import { firstHit } from '../acoustics/room/faces';
+import { aimDirection } from '../layout/aim';
 import type { Vec3 } from '../layout/schema';
-import { forwardOf } from './aim';
 import { mixOklab } from './colour-scale';
 import { type DeviceShape, loudspeakerShape, microphoneShape, stemOf } from './device-shapes';
 import FlatMesh from './FlatMesh';
@@ -28,7 +28,7 @@ export default function Devices({ scene }: { scene: RoomScene }) {
   const tips = useMemo(
     () =>
       microphones.flatMap(({ device }): Vec3[] => {
-        const forward = forwardOf(device);
+        const forward = aimDirection(device);
         return [device.position, device.position.map((value, axis) => value + 0.07 * forward[axis]) as Vec3];
       }),
     [microphones],

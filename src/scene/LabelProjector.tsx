@@ -2,6 +2,7 @@ import { useFrame, useThree } from '@react-three/fiber';
 import { type RefObject, useEffect } from 'react';
 import { type Camera, Vector3 } from 'three';
 import type { Vec3 } from '../layout/schema';
+import { seenLevel } from './floor-marks';
 import { crowdedTags, type LabelSpec } from './label-list';
 import { type LabelBox, placeLabels, type Rectangle } from './place-labels';
 
@@ -55,10 +56,13 @@ export default function LabelProjector(props: LabelProjectorProps) {
       move(elements.current.get(free[i].key), place, '');
       if (place !== null) lettered.push([...place, boxes[i].widthPx, boxes[i].heightPx]);
     });
+    const level = seenLevel(camera);
     for (const label of labels) {
       if (label.look === 'aim-point') move(elements.current.get(label.key), at(label.at), 'translate(-50%, -50%)');
-      if (label.look === 'dimension')
-        alongLine(elements.current.get(label.key), at(label.at), at(label.to ?? label.at));
+      if (label.look === 'dimension') {
+        const [from, to] = level ? [null, null] : [at(label.at), at(label.to ?? label.at)];
+        alongLine(elements.current.get(label.key), from, to);
+      }
     }
     if (wrapper.current !== null) {
       tell(wrapper.current, 'worst', worst === null ? null : at(worst));

@@ -1,7 +1,8 @@
+import { aimDirection } from '../layout/aim';
 import type { Ref } from '../layout/ref';
 import { sameRef } from '../layout/ref';
 import type { Vec3 } from '../layout/schema';
-import { aimOf, forwardOf, type Pointing } from './aim';
+import { aimOf, type Pointing } from './aim';
 import { loudspeakerShape } from './device-shapes';
 import { crowdedTags, type LabelSpec, labelList } from './label-list';
 import { type LabelArea, placeLabels } from './place-labels';
@@ -82,7 +83,7 @@ export function PlanDevices({ scene, frame, aimLines, onPick }: PlanDevicesProps
 }
 
 function ahead(device: Pointing, distanceM: number): Vec3 {
-  const forward = forwardOf(device);
+  const forward = aimDirection(device);
   return device.position.map((value, axis) => value + distanceM * forward[axis]) as Vec3;
 }
 

@@ -1,8 +1,8 @@
 import { useFrame } from '@react-three/fiber';
 import { useEffect, useMemo, useRef } from 'react';
 import { BufferGeometry, type Group, Shape, ShapeGeometry, Vector3 } from 'three';
+import { aimDirection } from '../layout/aim';
 import type { Talker, Vec3 } from '../layout/schema';
-import { forwardOf } from './aim';
 import ThinLines from './ThinLines';
 import type { ThemeColours } from './theme-colours';
 
@@ -21,7 +21,7 @@ export default function Talkers({ talkers, selectedId, colours }: TalkersProps) 
   const voices = useMemo(
     () =>
       talkers.flatMap((talker): Vec3[] => {
-        const forward = forwardOf(talker);
+        const forward = aimDirection(talker);
         return [talker.position, talker.position.map((value, axis) => value + 0.36 * forward[axis]) as Vec3];
       }),
     [talkers],

@@ -1,13 +1,9 @@
-import { deviceFrame } from '../acoustics/frame';
-import { type Faces, firstHit } from '../acoustics/room/faces';
+import type { Faces } from '../acoustics/room/faces';
+import { type Aimed, aimDirection, aimMeets, alongAim } from '../layout/aim';
 import type { Vec3 } from '../layout/schema';
 
-/** Something that points somewhere; angles in degrees as in the layout. */
-export interface Pointing {
-  position: Vec3;
-  pan: number;
-  tilt: number;
-  roll?: number;
+/** A device that points somewhere, and the face it lies on. */
+export interface Pointing extends Aimed {
   host?: string | null;
 }
 
@@ -21,19 +17,6 @@ export interface Aim {
 
 /** An ear this near to the line counts as aimed at, metres. */
 const EAR_M = 0.4;
-/** The device's own face and what it stands in are not what it aims at, metres. */
-const LEAST_M = 0.02;
-
-/** The nine numbers of a device's own axes: forward, left, up. */
-export function frameOf({ pan, tilt, roll = 0 }: Pointing): Float64Array {
-  const [panRad, tiltRad, rollRad] = [pan, tilt, roll].map((degrees) => (degrees * Math.PI) / 180);
-  return deviceFrame(panRad, tiltRad, rollRad);
-}
-
-export function forwardOf(device: Pointing): Vec3 {
-  const frame = frameOf(device);
-  return [frame[0], frame[1], frame[2]];
-}
 
 /**
  * What a device aims at along its forward axis: the first face other than its host, or a seat whose ear lies within
@@ -45,14 +28,14 @@ export function aimOf(
   faceIds: readonly string[],
   seats: readonly { id: string; ear: Vec3 }[],
 ): Aim | null {
-  const forward = forwardOf(device);
-  const hit = firstHit(faces, device.position, forward, LEAST_M, faceIds.indexOf(device.host ?? ''));
+  const forward = aimDirection(device);
+  const hit = aimMeets(faces, device, faceIds.indexOf(device.host ?? ''));
   const farthestM = hit?.distanceM ?? Number.POSITIVE_INFINITY;
   const seat = firstEar(device.position, forward, seats, farthestM);
   const met =
     seat ?? (hit === null ? null : { kind: 'face' as const, id: faceIds[hit.face], distanceM: hit.distanceM });
   if (met === null) return null;
-  const to = device.position.map((value, axis) => value + met.distanceM * forward[axis]) as Vec3;
+  const to = alongAim(device, met.distanceM);
   return { from: device.position, to, distanceM: met.distanceM, met: { kind: met.kind, id: met.id } };
 }
 

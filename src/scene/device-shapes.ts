@@ -1,5 +1,6 @@
+import { frameOf } from '../layout/aim';
 import type { DeviceModel, Vec3 } from '../layout/schema';
-import { frameOf, type Pointing } from './aim';
+import type { Pointing } from './aim';
 
 /** A device to draw: flat outlines filled with a tone of the sheet, and its edges as pairs of ends. In room coordinates. */
 export interface DeviceShape {

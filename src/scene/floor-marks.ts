@@ -1,3 +1,4 @@
+import { type Camera, Vector3 } from 'three';
 import { insideOutline } from '../acoustics/room/faces';
 import type { Vec3 } from '../layout/schema';
 import { lengthText, type Units } from '../report/units';
@@ -76,4 +77,12 @@ function dimension(from: Vec3, to: Vec3, units: Units): DimensionString {
   tick(0, 0.16);
   tick(lengthM, 0.16);
   return { from, to, ticks, text: lengthText(lengthM, units) };
+}
+
+const looking = new Vector3();
+
+/** True where the camera looks level: dimension strings on the floor would then lie in its cut edge. */
+export function seenLevel(camera: Camera): boolean {
+  camera.getWorldDirection(looking);
+  return Math.abs(looking.z) < 0.1;
 }

@@ -1,5 +1,6 @@
+import { aimDirection } from '../layout/aim';
 import type { Vec3 } from '../layout/schema';
-import { forwardOf, type Pointing } from './aim';
+import type { Pointing } from './aim';
 import type { RoomScene } from './use-room-scene';
 import {
   type FreeArea,
@@ -38,7 +39,7 @@ export function shotOfView(view: ViewChoice, scene: RoomScene, area: FreeArea): 
     case 'aim': {
       const device = pointingOf(scene, view.id);
       if (device === null) return null;
-      const forward = forwardOf(device);
+      const forward = aimDirection(device);
       // A little in front, clear of its own box.
       const eye = device.position.map((value, axis) => value + 0.1 * forward[axis]) as Vec3;
       return standingShot(eye, forward);

@@ -1,4 +1,5 @@
 import { create } from 'zustand';
+import { emptyLayout } from '../layout/empty';
 import { abandonMark, closeMark, type History, record, redo, startHistory, undo } from '../layout/history';
 import type { Problem } from '../layout/problem';
 import type { Ref } from '../layout/ref';
@@ -152,47 +153,6 @@ function requestPrediction(session: Session): void {
 
 const keptScheme = (layout: Layout, schemeId: string): string =>
   layout.schemes.some((scheme) => scheme.id === schemeId) ? schemeId : layout.schemes[0].id;
-
-function emptyLayout(): Layout {
-  return {
-    format: 'gainwright-layout',
-    version: 1,
-    name: '',
-    notes: '',
-    venue: {
-      air: { temperature: 20, humidity: 50, pressure: 101.325 },
-      finishes: [],
-      faces: [],
-      volume: null,
-      decay: { model: 'eyring' },
-      reflectionOrder: 1,
-      noise: { nr: 30 },
-      seating: [],
-      talkers: [],
-      views: [],
-    },
-    need: { kind: 'distance', metres: 3 },
-    schemes: [
-      {
-        id: 'A',
-        label: '',
-        microphones: [],
-        loudspeakers: [],
-        routing: [],
-        system: {
-          stabilityMargin: 6,
-          highPassHz: 0,
-          automix: 'off',
-          belowLimit: null,
-          latency: 0,
-          delayHold: 10,
-          equaliser: [0, 0, 0, 0, 0, 0, 0],
-        },
-      },
-    ],
-    models: [],
-  };
-}
 
 /** The layout shown. */
 export const useLayout = (): Layout => useSession((session) => session.history.layout);

@@ -1,6 +1,7 @@
 import { expect, it } from 'vitest';
-import { criticalTalker, loopShare, loudspeakerFigures, nearestTalker } from '../../src/panels/device-figures';
+import { criticalTalker, loopShare, nearestTalker } from '../../src/panels/device-figures';
 import type { SchemePrediction } from '../../src/predict/prediction';
+import { loudspeakerFigures } from '../../src/report/loudspeaker-figures';
 
 /** Two microphones, three loudspeakers, two talkers; only what the figures read. */
 const scheme = {

@@ -1,10 +1,11 @@
+import { readdirSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parseLayout } from '../../src/formats/layout-json';
 import { checkLayout } from '../../src/layout/check';
 import { predictionJson } from '../../src/predict/prediction-json';
 import { predict } from '../../src/predict/run';
 import { runPredict } from '../support/command-line';
-import { projectText } from '../support/files';
+import { projectPath, projectText } from '../support/files';
 import { predictionDifferences } from '../support/prediction-differences';
 
 const folder = 'data/reference/examples';
@@ -18,7 +19,16 @@ function predictFile(path: string): unknown {
   return JSON.parse(JSON.stringify(predictionJson(outcome.value, predict(outcome.value))));
 }
 
-describe.each(['one-line', 'committee'])('worked example %s', { timeout: 60_000 }, (name) => {
+/** Every layout of the folder has its prediction beside it. */
+const names = readdirSync(projectPath(folder))
+  .filter((file) => file.endsWith('.layout.json'))
+  .map((file) => file.replace('.layout.json', ''));
+
+test('the folder holds the worked examples', () => {
+  expect(names.length).toBeGreaterThanOrEqual(8);
+});
+
+describe.each(names)('worked example %s', { timeout: 60_000 }, (name) => {
   const path = `${folder}/${name}.layout.json`;
 
   test('agrees with the independent implementation in every figure of all three rungs', () => {

@@ -3,6 +3,9 @@ import { type Faces, heightAbove, insideOutline } from '../room/faces';
 /** A crossing this near either end of a leg, measured along it, does not block, metres. */
 const END_M = 0.01;
 
+/** A point this near a face's plane lies on it, metres. */
+export const ON_PLANE_M = 1e-6;
+
 /**
  * True where a face lies across the straight leg between two points. Faces block from both sides and at every
  * frequency; diffraction round edges is left out. `skipA` and `skipB` are faces that never block this leg (−1 for none).
@@ -23,10 +26,9 @@ export function isBlocked(
     if (face === skipA || face === skipB) continue;
     const from = heightAbove(faces, face, ax, ay, az);
     const to = heightAbove(faces, face, bx, by, bz);
-    if (from > 0 === to > 0 && from !== 0 && to !== 0) continue;
-    if (from === to) continue;
+    // A leg that ends in the plane of a face, or lies in it, is not blocked by it; rounding must not decide that.
+    if (Math.abs(from) <= ON_PLANE_M || Math.abs(to) <= ON_PLANE_M || from > 0 === to > 0) continue;
     const part = from / (from - to);
-    if (part < 0 || part > 1) continue;
     if (part * lengthM <= END_M || (1 - part) * lengthM <= END_M) continue;
     if (insideOutline(faces, face, ax + part * (bx - ax), ay + part * (by - ay), az + part * (bz - az))) return true;
   }

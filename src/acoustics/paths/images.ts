@@ -1,9 +1,7 @@
 import { BAND_COUNT } from '../bands';
 import { type Faces, heightAbove, insideOutline } from '../room/faces';
-import { isBlocked } from './blocking';
+import { isBlocked, ON_PLANE_M } from './blocking';
 
-/** A point this near a face's plane lies on it and makes no image in it, metres. */
-const ON_PLANE_M = 1e-6;
 /** Images of one source this near each other are one, metres. */
 const SAME_IMAGE_M = 1e-5;
 
@@ -124,7 +122,8 @@ export function traceImage(
     const from = heightAbove(faces, face, tx, ty, tz);
     const to = heightAbove(faces, face, p[3 * at], p[3 * at + 1], p[3 * at + 2]);
     if (from === to) return false;
-    const part = from / (from - to);
+    // Two reflections on the edge their faces share are one place; rounding must not put the second behind its face.
+    const part = previous >= 0 && Math.abs(from) <= ON_PLANE_M ? 0 : from / (from - to);
     if (!(part >= 0 && part <= 1)) return false;
     const hx = tx + part * (p[3 * at] - tx);
     const hy = ty + part * (p[3 * at + 1] - ty);

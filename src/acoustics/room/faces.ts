@@ -183,6 +183,9 @@ export function distanceToFace(faces: Faces, face: number, x: number, y: number,
   return least;
 }
 
+/** Faces met this near each other (relative) are met together; the first of them is taken. */
+const TIE = 1e-9;
+
 /** The first face met along a ray, and how far, beyond `leastM`; null where nothing is hit. */
 export function firstHit(
   faces: Faces,
@@ -198,7 +201,7 @@ export function firstHit(
     const slope = n[3 * face] * direction[0] + n[3 * face + 1] * direction[1] + n[3 * face + 2] * direction[2];
     if (Math.abs(slope) < 1e-12) continue;
     const distanceM = -heightAbove(faces, face, origin[0], origin[1], origin[2]) / slope;
-    if (distanceM < leastM || (hit !== null && distanceM >= hit.distanceM)) continue;
+    if (distanceM < leastM || (hit !== null && distanceM >= hit.distanceM * (1 - TIE))) continue;
     const x = origin[0] + distanceM * direction[0];
     const y = origin[1] + distanceM * direction[1];
     const z = origin[2] + distanceM * direction[2];

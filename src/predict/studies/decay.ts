@@ -1,9 +1,8 @@
-import { airAttenuationDbPerM, soundSpeed } from '../../acoustics/air';
 import { BAND_COUNT } from '../../acoustics/bands';
-import { type RoomField, roomField } from '../../acoustics/room/decay';
-import { shellVolume } from '../../acoustics/room/shell';
+import type { RoomField } from '../../acoustics/room/decay';
 import { facesOf } from '../../layout/geometry';
-import type { Finish, Layout } from '../../layout/schema';
+import type { Layout, Venue } from '../../layout/schema';
+import { fieldOf } from '../prepare';
 
 /** What one finish, or the air, takes out of the room. Seven bands. */
 export interface Contribution {
@@ -37,8 +36,7 @@ export const GOOD_ABSORBER = 0.9;
 /** Who absorbs how much, and which face would shorten the decay most if it were covered (band 2 is 500 Hz). */
 export function studyDecay(layout: Layout, band = 2): DecayStudy {
   const { venue } = layout;
-  const fieldOf = createFieldOf(layout);
-  const field = fieldOf(venue.finishes, null);
+  const field = fieldCovering(venue, null);
   const faces = facesOf(venue);
   const areaOf = (face: number) => faces.areas[face] * (faces.twoSided[face] ? 2 : 1);
 
@@ -63,31 +61,21 @@ export function studyDecay(layout: Layout, band = 2): DecayStudy {
     venue.decay.model === 'given'
       ? []
       : venue.faces
-          .map((face, i) => ({ face: face.id, areaM2: areaOf(i), decayS: fieldOf(venue.finishes, face.id).decayS }))
+          .map((face, i) => ({ face: face.id, areaM2: areaOf(i), decayS: fieldCovering(venue, i).decayS }))
           .sort((a, b) => a.decayS[band] - b.decayS[band]);
   contributions.sort((a, b) => b.share[band] - a.share[band]);
   return { contributions, treatments };
 }
 
 /** The room's field with one face (or none) covered with a good absorber where it absorbs less. */
-function createFieldOf(layout: Layout): (finishes: readonly Finish[], covered: string | null) => RoomField {
-  const { venue } = layout;
-  const soundSpeedMS = soundSpeed(venue.air.temperature);
-  const airDbPerM = airAttenuationDbPerM({
-    temperatureC: venue.air.temperature,
-    humidityPercent: venue.air.humidity,
-    pressureKPa: venue.air.pressure,
-  });
-  return (finishes, covered) => {
-    const faces = facesOf({ faces: venue.faces, finishes: [...finishes] });
-    const at = venue.faces.findIndex((face) => face.id === covered);
-    if (at >= 0) {
-      for (let i = at * BAND_COUNT; i < (at + 1) * BAND_COUNT; i++) {
-        faces.absorption[i] = Math.max(faces.absorption[i], GOOD_ABSORBER);
-      }
+function fieldCovering(venue: Venue, covered: number | null): RoomField {
+  const faces = facesOf(venue);
+  if (covered !== null) {
+    for (let i = covered * BAND_COUNT; i < (covered + 1) * BAND_COUNT; i++) {
+      faces.absorption[i] = Math.max(faces.absorption[i], GOOD_ABSORBER);
     }
-    return roomField(faces, venue.volume ?? shellVolume(faces), airDbPerM, soundSpeedMS, venue.decay);
-  };
+  }
+  return fieldOf(venue, faces);
 }
 
 function sumOf(contributions: readonly Contribution[]): Float64Array {

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { createFaces } from '../../src/acoustics/room/faces';
+import { aimDirection, aimMeets, aimsThrough, layOn, nearestFace, turnTo } from '../../src/layout/aim';
 import type { Vec3 } from '../../src/layout/schema';
-import { aimDirection, aimMeets, aimsThrough, layOn, nearestFace, turnTo } from '../../src/panels/aim';
 
 const absorption = [0.1, 0.1, 0.1, 0.1, 0.1, 0.1, 0.1];
 /** Floor and ceiling of a room of 8 by 6 by 3 m, and a screen standing free at x = 5. */

@@ -1,6 +1,6 @@
 import { aimAngles, deviceFrame } from '../acoustics/frame';
 import { distanceToFace, type Faces, firstHit, heightAbove, insideOutline } from '../acoustics/room/faces';
-import type { Vec3 } from '../layout/schema';
+import type { Vec3 } from './schema';
 
 /** What turns: where it stands, degrees. */
 export interface Aimed {
@@ -24,9 +24,16 @@ const radians = (degrees: number): number => (degrees * Math.PI) / 180;
 /** Angles and places from a calculation are kept to what anyone could set out: 0.001° and 0.1 mm. */
 const kept = (value: number, digits: number): number => Number(value.toFixed(digits)) + 0;
 
+/** Angles of a device in degrees, as a layout gives them. */
+export type Turn = Pick<Aimed, 'pan' | 'tilt' | 'roll'>;
+
+/** The nine numbers of a device's own axes: forward, left, up. */
+export const frameOf = ({ pan, tilt, roll = 0 }: Turn): Float64Array =>
+  deviceFrame(radians(pan), radians(tilt), radians(roll));
+
 /** Unit vector along the aim. */
-export function aimDirection({ pan, tilt }: Pick<Aimed, 'pan' | 'tilt'>): Vec3 {
-  const frame = deviceFrame(radians(pan), radians(tilt), 0);
+export function aimDirection(turn: Turn): Vec3 {
+  const frame = frameOf(turn);
   return [frame[0], frame[1], frame[2]];
 }
 
