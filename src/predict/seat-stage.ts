@@ -13,6 +13,8 @@ import type { PreparedScheme, PreparedTalker, PreparedVenue } from './prepare';
 interface TalkerDrive {
   talker: PreparedTalker;
   wantedDba: number;
+  /** 10^(level/10) of the talker's dBA: its power in the distance rung's one pseudo-band. */
+  flatPower: number;
   /** Lower of limit and idle limit less the stability margin does not depend on the seat. dB; null without a loop. */
   rungs: Record<Rung, { limitPower: number; pauseCostDb: number; feeds: Float64Array } | null>;
   /** Power spectrum fed to each loudspeaker at working gain (room rung): [loudspeaker][band], 1 m re on axis. */
@@ -85,6 +87,7 @@ function createDrive(venue: PreparedVenue, scheme: PreparedScheme, loop: TalkerL
     talker,
     wantedDba:
       need.kind === 'distance' ? talker.levelDba - 20 * Math.log10(need.metres) : venue.noiseDba + need.signalToNoise,
+    flatPower: powerOfDb(talker.levelDba),
     rungs,
     working,
     leadS: leads(venue, scheme, loop),
@@ -187,9 +190,7 @@ function createSeatFigure(venue: PreparedVenue, scheme: PreparedScheme, need: Ne
     const flat = rung === 'distance';
     const gains = (paths: PairPaths) => (rung === 'directivity' ? paths.direct : paths.total);
     // On the distance rung one pseudo-band carries the talker's dBA.
-    const direct = flat
-      ? powerOfDb(talker.levelDba) * fromTalker.distanceGain
-      : weighted(talker.powers, gains(fromTalker));
+    const direct = flat ? drive.flatPower * fromTalker.distanceGain : weighted(talker.powers, gains(fromTalker));
     const unaidedDba = finiteDb(direct);
     const out = drive.seats[rung];
     out.neededDb[seat] =
@@ -199,7 +200,7 @@ function createSeatFigure(venue: PreparedVenue, scheme: PreparedScheme, need: Ne
     if (state === null) return;
     let power = 0;
     for (let l = 0; l < L; l++) {
-      if (flat) power += powerOfDb(talker.levelDba) * state.feeds[l] * fromLoudspeakers[l].distanceGain;
+      if (flat) power += drive.flatPower * state.feeds[l] * fromLoudspeakers[l].distanceGain;
       else power += weighted(talker.powers, gains(fromLoudspeakers[l]), state.feeds, l * BAND_COUNT);
     }
     const systemDba = finiteDb(power * state.limitPower);

@@ -3,7 +3,7 @@ import type { RoomField } from '../room/decay';
 import { diffuseGains, firstAbsorption } from '../room/diffuse';
 import type { Faces } from '../room/faces';
 import { createAirLoss } from './air-loss';
-import { isBlocked } from './blocking';
+import { createBlockers, isBlocked } from './blocking';
 import { type Device, devicePowers } from './device';
 import { createReflection, type ImageTree, imageTree, traceImage } from './images';
 
@@ -15,6 +15,8 @@ export interface Terminal {
   device: Device;
   /** Absorption of the faces it sees first, seven bands. */
   absorption: Float64Array;
+  /** It lies in front of all outer faces, so that none of them can block a leg to another such place. */
+  inner: boolean;
 }
 
 export interface Source extends Terminal {
@@ -78,6 +80,7 @@ export function createPathFinder(room: PathRoom): PathFinder {
   const airLoss = createAirLoss(airDbPerM);
   const there = new Float64Array(3);
   const back = new Float64Array(3);
+  const blockers = createBlockers(faces);
   const received = new Float64Array(BAND_COUNT);
   const reflection = createReflection();
   let valid = new Uint8Array(64);
@@ -103,19 +106,19 @@ export function createPathFinder(room: PathRoom): PathFinder {
     for (let b = 0; b < BAND_COUNT; b++) out[at + b] *= received[b] * spread;
   }
 
-  function findDirect(source: Device, receiver: Device, out: PairPaths): void {
+  function findDirect(source: Device, receiver: Device, among: Int32Array, out: PairPaths): void {
     there[0] = receiver.x - source.x;
     there[1] = receiver.y - source.y;
     there[2] = receiver.z - source.z;
     for (let axis = 0; axis < 3; axis++) back[axis] = -there[axis];
     out.lengthM = Math.sqrt(there[0] * there[0] + there[1] * there[1] + there[2] * there[2]);
     out.distanceGain = 1 / Math.max(out.lengthM, LEAST_DISTANCE_M) ** 2;
-    out.blocked = isBlocked(faces, source.x, source.y, source.z, receiver.x, receiver.y, receiver.z, -1, -1);
+    out.blocked = isBlocked(faces, among, source.x, source.y, source.z, receiver.x, receiver.y, receiver.z, -1, -1);
     if (out.blocked) out.direct.fill(0);
     else gainsAlong(source, there, receiver, back, out.lengthM, out.direct, 0);
   }
 
-  function findReflected(source: Source, receiver: Device, out: PairPaths): void {
+  function findReflected(source: Source, receiver: Device, among: Int32Array, out: PairPaths): void {
     const { images } = source;
     out.reflections = 0;
     if (valid.length < images.count) valid = new Uint8Array(2 * images.count);
@@ -123,7 +126,8 @@ export function createPathFinder(room: PathRoom): PathFinder {
     valid[0] = out.blocked ? 0 : 1;
     for (let image = 1; image < images.count; image++) {
       if (twinCounted(images, valid, image)) continue;
-      if (!traceImage(faces, images, image, receiver.x, receiver.y, receiver.z, receiver.host, reflection)) continue;
+      if (!traceImage(faces, images, image, receiver.x, receiver.y, receiver.z, receiver.host, among, reflection))
+        continue;
       valid[image] = 1;
       if (out.reflections === out.reflectionLengthsM.length) grow(out);
       const at = out.reflections * BAND_COUNT;
@@ -138,12 +142,18 @@ export function createPathFinder(room: PathRoom): PathFinder {
     source: (device) => ({
       device,
       absorption: absorptionOf(device),
+      inner: blockers.isInner(device.x, device.y, device.z),
       images: imageTree(faces, device.x, device.y, device.z, device.host, reflectionOrder),
     }),
-    receiver: (device) => ({ device, absorption: absorptionOf(device) }),
+    receiver: (device) => ({
+      device,
+      absorption: absorptionOf(device),
+      inner: blockers.isInner(device.x, device.y, device.z),
+    }),
     find(source, receiver, out) {
-      findDirect(source.device, receiver.device, out);
-      findReflected(source, receiver.device, out);
+      const among = source.inner && receiver.inner ? blockers.inner : blockers.every;
+      findDirect(source.device, receiver.device, among, out);
+      findReflected(source, receiver.device, among, out);
       diffuseGains(field, reflectionOrder, source, receiver, out.diffuse);
       for (let b = 0; b < BAND_COUNT; b++) {
         let sum = out.direct[b] + out.diffuse[b];

@@ -96,7 +96,8 @@ export const createReflection = (): Reflection => ({
 
 /**
  * Follows the path from a receiver back to the source through one image (not image 0). False where a reflection point
- * misses its face, the receiver lies behind the last face or on it, or another face blocks a leg; else `out` is filled.
+ * misses its face, the receiver lies behind the last face or on it, or another face of `among` blocks a leg; else
+ * `out` is filled.
  */
 export function traceImage(
   faces: Faces,
@@ -106,6 +107,7 @@ export function traceImage(
   y: number,
   z: number,
   receiverHost: number,
+  among: Int32Array,
   out: Reflection,
 ): boolean {
   const last = tree.faces[image];
@@ -129,7 +131,7 @@ export function traceImage(
     const hy = ty + part * (p[3 * at + 1] - ty);
     const hz = tz + part * (p[3 * at + 2] - tz);
     if (!insideOutline(faces, face, hx, hy, hz)) return false;
-    if (isBlocked(faces, tx, ty, tz, hx, hy, hz, face, previous)) return false;
+    if (isBlocked(faces, among, tx, ty, tz, hx, hy, hz, face, previous)) return false;
     if (at === image) {
       out.arrival[0] = hx - x;
       out.arrival[1] = hy - y;
@@ -140,7 +142,7 @@ export function traceImage(
     tz = hz;
     previous = face;
   }
-  if (isBlocked(faces, tx, ty, tz, p[0], p[1], p[2], previous, -1)) return false;
+  if (isBlocked(faces, among, tx, ty, tz, p[0], p[1], p[2], previous, -1)) return false;
   out.departure[0] = tx - p[0];
   out.departure[1] = ty - p[1];
   out.departure[2] = tz - p[2];

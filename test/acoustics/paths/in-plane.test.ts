@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { isBlocked } from '../../../src/acoustics/paths/blocking';
+import { createBlockers, isBlocked } from '../../../src/acoustics/paths/blocking';
 import { createReflection, imageTree, traceImage } from '../../../src/acoustics/paths/images';
 import { createFaces, firstHit } from '../../../src/acoustics/room/faces';
 
@@ -68,7 +68,7 @@ describe.each(TURNS)('in a box turned by %s rad', (angleRad) => {
     for (const along of [1, 2.2, 3.7, 5.1, 6.9]) {
       const a = turned(angleRad, 0.5, 0, 1.1);
       const b = turned(angleRad, along + 0.9, 0, 2.3);
-      expect(isBlocked(faces, ...a, ...b, -1, -1)).toBe(false);
+      expect(isBlocked(faces, createBlockers(faces).every, ...a, ...b, -1, -1)).toBe(false);
     }
   });
 
@@ -96,7 +96,9 @@ describe.each(TURNS)('in a box turned by %s rad', (angleRad) => {
       return [tree.faces[image], tree.faces[first]].sort().join() === '2,4';
     });
     expect(corner).toHaveLength(2);
-    const found = corner.filter((image) => traceImage(faces, tree, image, ...to, -1, createReflection()));
+    const found = corner.filter((image) =>
+      traceImage(faces, tree, image, ...to, -1, createBlockers(faces).every, createReflection()),
+    );
     expect(found).toHaveLength(2);
   });
 });
