@@ -1,23 +1,24 @@
+import { vec3 } from 'gl-matrix';
+
 /**
  * A device's own axes in room coordinates, nine numbers: forward u, left v, up w.
  * Pan turns counter-clockwise seen from above, 0 along +x; tilt is up positive; roll turns
  * about the aim axis, right-handed. Angles in radians.
  */
 export function deviceFrame(panRad: number, tiltRad: number, rollRad: number): Float64Array {
-  const [cp, sp] = [Math.cos(panRad), Math.sin(panRad)];
-  const [ct, st] = [Math.cos(tiltRad), Math.sin(tiltRad)];
-  const [cr, sr] = [Math.cos(rollRad), Math.sin(rollRad)];
-  const u = [ct * cp, ct * sp, st];
-  const v0 = [-sp, cp, 0];
-  const w0 = [u[1] * v0[2] - u[2] * v0[1], u[2] * v0[0] - u[0] * v0[2], u[0] * v0[1] - u[1] * v0[0]];
+  const forward: vec3 = [Math.cos(tiltRad) * Math.cos(panRad), Math.cos(tiltRad) * Math.sin(panRad), Math.sin(tiltRad)];
+  const level: vec3 = [-Math.sin(panRad), Math.cos(panRad), 0];
+  const upright = vec3.cross([0, 0, 0], forward, level);
   const frame = new Float64Array(9);
-  for (let i = 0; i < 3; i++) {
-    frame[i] = u[i];
-    frame[3 + i] = v0[i] * cr + w0[i] * sr;
-    frame[6 + i] = -v0[i] * sr + w0[i] * cr;
-  }
+  frame.set(forward, 0);
+  frame.set(turned(level, Math.cos(rollRad), upright, Math.sin(rollRad)), 3);
+  frame.set(turned(upright, Math.cos(rollRad), level, -Math.sin(rollRad)), 6);
   return frame;
 }
+
+/** a·scaleA + b·scaleB. Plain arrays: gl-matrix's own vectors have 32 bits, too few for rooms. */
+const turned = (a: vec3, scaleA: number, b: vec3, scaleB: number): vec3 =>
+  vec3.scaleAndAdd([0, 0, 0], vec3.scale([0, 0, 0], a, scaleA), b, scaleB);
 
 /** Pan and tilt (radians) that aim along a direction; a vertical aim keeps the pan given. */
 export function aimAngles(x: number, y: number, z: number, keptPanRad: number): { panRad: number; tiltRad: number } {

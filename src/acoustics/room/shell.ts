@@ -1,3 +1,4 @@
+import { vec3 } from 'gl-matrix';
 import type { Faces } from './faces';
 
 /** Corners nearer than this are one corner, metres. */
@@ -51,7 +52,7 @@ function cornersOf(corners: Float64Array): Point[] {
   return Array.from({ length: corners.length / 3 }, (_, i) => [corners[3 * i], corners[3 * i + 1], corners[3 * i + 2]]);
 }
 
-const apart = (a: Point, b: Point): number => Math.hypot(a[0] - b[0], a[1] - b[1], a[2] - b[2]);
+const apart = (a: Point, b: Point): number => vec3.distance(a, b);
 
 const indexOf = (points: readonly Point[], corner: Point): number =>
   points.findIndex((p) => apart(p, corner) <= WELD_M);
@@ -90,8 +91,7 @@ function alongEdge(a: Point, b: Point, p: Point): number | null {
 export function shellVolume(faces: Faces): number {
   let sixfold = 0;
   eachTriangle(faces, (a, b, c) => {
-    sixfold +=
-      a[0] * (b[1] * c[2] - b[2] * c[1]) + a[1] * (b[2] * c[0] - b[0] * c[2]) + a[2] * (b[0] * c[1] - b[1] * c[0]);
+    sixfold += vec3.dot(a, vec3.cross([0, 0, 0], b, c));
   });
   return -sixfold / 6;
 }
