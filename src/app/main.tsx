@@ -1,23 +1,17 @@
-import '@fontsource/barlow-semi-condensed/latin-400.css';
-import '@fontsource/barlow-semi-condensed/latin-500.css';
-import '@fontsource/barlow-semi-condensed/latin-600.css';
-import '@fontsource-variable/newsreader/wght.css';
-import '../controls/tokens.css';
-import '../controls/base.css';
-import { StrictMode } from 'react';
-import { createRoot } from 'react-dom/client';
-import { startPredicting } from '../session/session';
-import App from './App';
-import { keepPreferences } from './preferences';
-import { openFirst } from './venues';
+/**
+ * The way into the page. The worker is started before anything else is even read, because the browser fetches its
+ * script only when this thread has time: the prediction and the page then come up side by side.
+ */
+const createWorker = () => new Worker(new URL('../predict/worker.ts', import.meta.url), { type: 'module' });
 
-keepPreferences();
-startPredicting(() => new Worker(new URL('../predict/worker.ts', import.meta.url), { type: 'module' }));
-openFirst();
-const root = document.getElementById('app');
-if (root === null) throw new Error('The page has no #app element.');
-createRoot(root).render(
-  <StrictMode>
-    <App />
-  </StrictMode>,
+let ready: Worker | null = createWorker();
+
+void import('./boot').then(({ boot }) =>
+  boot(() => {
+    const worker = ready ?? createWorker();
+    ready = null;
+    return worker;
+  }),
 );
+
+export {};

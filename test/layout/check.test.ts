@@ -280,7 +280,7 @@ describe('places', () => {
         const block = l.venue.seating[0];
         if (block.kind === 'block') block.rowSpacing = 4;
       },
-      'venue.seating[0]: seat A-2-1 and 2 more is outside the room; ears inside the shell; move the block or omit the seat.',
+      'venue.seating[0]: seat A-2-1 and 2 more are outside the room; ears inside the shell; move the block or omit the seat.',
     ],
     [
       'a talker on a microphone',
