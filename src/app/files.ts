@@ -18,6 +18,14 @@ export const unsaved = (): boolean => {
 
 /** Asks which file to open. */
 export async function openFile(): Promise<void> {
+  if (navigator.userActivation?.isActive === false) {
+    tell(
+      'Open a layout',
+      ['Layouts are files whose names end in .layout.json.'],
+      [{ label: 'Choose a file', main: true, run: () => void openFile() }, { label: 'Cancel' }],
+    );
+    return;
+  }
   if (!('showOpenFilePicker' in window)) {
     const file = await pickWithInput();
     if (file !== null) await openPicked(file, null);
@@ -25,6 +33,16 @@ export async function openFile(): Promise<void> {
   }
   const picked = await unlessCancelled(window.showOpenFilePicker({ types: TYPES }));
   if (picked !== null) await openPicked(await picked[0].getFile(), picked[0]);
+}
+
+/**
+ * A browser lets a page ask for a file only just after a press it counts as the person's, and some do not count their
+ * own shortcut keys: then a button is offered first. True where it was.
+ */
+function askFirst(title: string, line: string, ask: () => Promise<unknown>): boolean {
+  if (navigator.userActivation?.isActive !== false) return false;
+  tell(title, [line], [{ label: 'Choose a file', main: true, run: () => void ask() }, { label: 'Cancel' }]);
+  return true;
 }
 
 function pickWithInput(): Promise<File | null> {
@@ -90,6 +108,11 @@ export async function saveFile(elsewhere = false): Promise<boolean> {
     return true;
   }
   if (handle === null || elsewhere) {
+    if (
+      askFirst('Save the layout', `It will be saved where you choose, as ${name} at first.`, () => saveFile(elsewhere))
+    ) {
+      return false;
+    }
     handle = (await unlessCancelled(window.showSaveFilePicker({ suggestedName: name, types: TYPES }))) ?? handle;
     if (handle === null) return false;
   }

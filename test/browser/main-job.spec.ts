@@ -140,7 +140,8 @@ describe('files', () => {
 
   async function openFile(page: Page, path: string) {
     const chooser = page.waitForEvent('filechooser');
-    await page.keyboard.press('Control+o');
+    await page.getByRole('button', { name: 'Open', exact: true }).click();
+    await page.getByRole('menuitem', { name: 'A layout file…' }).click();
     await (await chooser).setFiles(path);
   }
 

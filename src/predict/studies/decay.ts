@@ -1,5 +1,6 @@
 import { BAND_COUNT } from '../../acoustics/bands';
 import type { RoomField } from '../../acoustics/room/decay';
+import type { Faces } from '../../acoustics/room/faces';
 import { facesOf } from '../../layout/geometry';
 import type { Layout, Venue } from '../../layout/schema';
 import { fieldOf } from '../prepare';
@@ -36,8 +37,8 @@ export const GOOD_ABSORBER = 0.9;
 /** Who absorbs how much, and which face would shorten the decay most if it were covered (band 2 is 500 Hz). */
 export function studyDecay(layout: Layout, band = 2): DecayStudy {
   const { venue } = layout;
-  const field = fieldCovering(venue, null);
   const faces = facesOf(venue);
+  const field = fieldOf(venue, faces);
   const areaOf = (face: number) => faces.areas[face] * (faces.twoSided[face] ? 2 : 1);
 
   const contributions: Contribution[] = venue.finishes.map((finish) => {
@@ -61,21 +62,19 @@ export function studyDecay(layout: Layout, band = 2): DecayStudy {
     venue.decay.model === 'given'
       ? []
       : venue.faces
-          .map((face, i) => ({ face: face.id, areaM2: areaOf(i), decayS: fieldCovering(venue, i).decayS }))
+          .map((face, i) => ({ face: face.id, areaM2: areaOf(i), decayS: fieldCovering(venue, faces, i).decayS }))
           .sort((a, b) => a.decayS[band] - b.decayS[band]);
   contributions.sort((a, b) => b.share[band] - a.share[band]);
   return { contributions, treatments };
 }
 
-/** The room's field with one face (or none) covered with a good absorber where it absorbs less. */
-function fieldCovering(venue: Venue, covered: number | null): RoomField {
-  const faces = facesOf(venue);
-  if (covered !== null) {
-    for (let i = covered * BAND_COUNT; i < (covered + 1) * BAND_COUNT; i++) {
-      faces.absorption[i] = Math.max(faces.absorption[i], GOOD_ABSORBER);
-    }
+/** The room's field with one face covered with a good absorber where it absorbs less. */
+function fieldCovering(venue: Venue, faces: Faces, covered: number): RoomField {
+  const absorption = faces.absorption.slice();
+  for (let i = covered * BAND_COUNT; i < (covered + 1) * BAND_COUNT; i++) {
+    absorption[i] = Math.max(absorption[i], GOOD_ABSORBER);
   }
-  return fieldOf(venue, faces);
+  return fieldOf(venue, { ...faces, absorption });
 }
 
 function sumOf(contributions: readonly Contribution[]): Float64Array {
