@@ -1,6 +1,6 @@
 import { BAND_COUNT } from '../acoustics/bands';
 import { A_WEIGHTS, aWeightedPower, dbOfPower, powerOfDb } from '../acoustics/level';
-import { loudspeakerFeeds } from '../acoustics/loop/gain';
+import { loudspeakerFeeds } from '../acoustics/loop/feeds';
 import { createPairPaths, type PairPaths } from '../acoustics/paths/finder';
 import { createTransmissionIndex } from '../acoustics/speech/transmission-index';
 import type { Need } from '../layout/schema';

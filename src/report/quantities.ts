@@ -1,4 +1,3 @@
-import { BAND_COUNT } from '../acoustics/bands';
 import type { Rung, SchemePrediction, TalkerPrediction } from '../predict/prediction';
 
 /** How a quantity is coloured and read. */
@@ -164,7 +163,3 @@ export function summarise(scheme: SchemePrediction, chosen: string | null, seats
   }
   return summary;
 }
-
-/** Seven levels of one seat. */
-export const bandLevels = (talker: TalkerPrediction, seat: number): Float64Array =>
-  talker.room.totalDb.subarray(seat * BAND_COUNT, (seat + 1) * BAND_COUNT);
