@@ -89,7 +89,7 @@ describe('the main job', () => {
     await page.keyboard.press('Enter');
     await expect.poll(() => sentence(page)).not.toBe(before.sentence);
     await expect.poll(() => room(page).getAttribute('data-seats-short')).not.toBe('0');
-    expect(await margins(page)).not.toEqual(before.margins);
+    await expect.poll(() => margins(page)).not.toEqual(before.margins);
 
     await page.keyboard.press('Escape');
     await page.keyboard.press('Control+z');
@@ -150,11 +150,13 @@ describe('files', () => {
     await withoutPickers(page);
     await page.reload();
     await verdict(page).getByText('serves').waitFor();
+    const untouched = await margins(page);
     await choose(page, 'm-s6');
     const z = page.locator('.item').getByRole('spinbutton', { name: 'Place z' });
     await z.fill('1.31');
     await z.press('Enter');
     await expect.poll(() => verdict(page).getAttribute('data-stale')).toBe('false');
+    await expect.poll(() => margins(page)).not.toEqual(untouched);
     const edited = { sentence: await sentence(page), margins: await margins(page) };
 
     const download = page.waitForEvent('download');
