@@ -6,6 +6,8 @@ export const MODULATION_HZ: readonly number[] = Array.from({ length: 14 }, (_, i
 const MODULATION_COUNT = MODULATION_HZ.length;
 const MODULATION_RAD_PER_S = Float64Array.from(MODULATION_HZ, (frequencyHz) => 2 * Math.PI * frequencyHz);
 const CELL_COUNT = BAND_COUNT * MODULATION_COUNT;
+/** Discrete arrivals summed at once. */
+const BATCH = 4;
 
 /** Octave weights α (IEC 60268-16:2020, Table A.1). */
 export const OCTAVE_WEIGHTS: readonly number[] = [0.085, 0.127, 0.23, 0.233, 0.309, 0.224, 0.173];
@@ -54,11 +56,36 @@ export function createTransmissionIndex(): TransmissionIndex {
   const modulations = new Float64Array(CELL_COUNT);
   const cos = new Float64Array(MODULATION_COUNT);
   const sin = new Float64Array(MODULATION_COUNT);
+  // Discrete arrivals wait until there are four, so that each cell of the sums is fetched and stored once for four.
+  const waitingCos = new Float64Array(BATCH * MODULATION_COUNT);
+  const waitingSin = new Float64Array(BATCH * MODULATION_COUNT);
+  const waitingEnergies = new Float64Array(BATCH * BAND_COUNT);
+  let waiting = 0;
+  const decay = createDecayFactors();
   let originS = Number.NaN;
 
   function turn(timeS: number): void {
     if (Number.isNaN(originS)) originS = timeS;
     phasesAt(timeS - originS, cos, sin);
+  }
+
+  function sumWaiting(): void {
+    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((i) => i * MODULATION_COUNT);
+    for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
+      const e0 = waitingEnergies[b];
+      const e1 = waitingEnergies[BAND_COUNT + b];
+      const e2 = waitingEnergies[2 * BAND_COUNT + b];
+      const e3 = waitingEnergies[3 * BAND_COUNT + b];
+      speech[b] += e0 + e1 + e2 + e3;
+      for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
+        real[cell] +=
+          e0 * waitingCos[c0 + f] + e1 * waitingCos[c1 + f] + e2 * waitingCos[c2 + f] + e3 * waitingCos[c3 + f];
+        lag[cell] +=
+          e0 * waitingSin[c0 + f] + e1 * waitingSin[c1 + f] + e2 * waitingSin[c2 + f] + e3 * waitingSin[c3 + f];
+      }
+    }
+    waitingEnergies.fill(0);
+    waiting = 0;
   }
 
   function divideBy(powers: Float64Array): Float64Array {
@@ -77,37 +104,61 @@ export function createTransmissionIndex(): TransmissionIndex {
       speech.fill(0);
       real.fill(0);
       lag.fill(0);
+      waitingEnergies.fill(0);
+      waiting = 0;
       originS = Number.NaN;
     },
     add(timeS, energies, at) {
       turn(timeS);
-      for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
-        const energy = energies[at + b];
-        speech[b] += energy;
-        for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
-          real[cell] += energy * cos[f];
-          lag[cell] += energy * sin[f];
-        }
-      }
+      waitingCos.set(cos, waiting * MODULATION_COUNT);
+      waitingSin.set(sin, waiting * MODULATION_COUNT);
+      for (let b = 0; b < BAND_COUNT; b++) waitingEnergies[waiting * BAND_COUNT + b] = energies[at + b];
+      if (++waiting === BATCH) sumWaiting();
     },
     addDiffuse(startS, energies, at, decayS) {
       turn(startS);
+      decay.of(decayS);
       for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
         const energy = energies[at + b];
         speech[b] += energy;
         for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
-          const y = (MODULATION_RAD_PER_S[f] * decayS[b]) / DECAY_NEPERS;
-          const share = energy / (1 + y * y);
-          real[cell] += share * (cos[f] - y * sin[f]);
-          lag[cell] += share * (sin[f] + y * cos[f]);
+          const lagging = decay.lags[cell];
+          const share = energy * decay.shares[cell];
+          real[cell] += share * (cos[f] - lagging * sin[f]);
+          lag[cell] += share * (sin[f] + lagging * cos[f]);
         }
       }
     },
     finish(noisePowers) {
+      sumWaiting();
       auditoryPowers(speech, noisePowers, totals);
       return indexOf(divideBy(totals), mti);
     },
-    modulationsInQuiet: () => divideBy(speech).slice(),
+    modulationsInQuiet() {
+      sumWaiting();
+      return divideBy(speech).slice();
+    },
+  };
+}
+
+/** y = 2πF·T/13.8155 and 1/(1 + y²) of each cell, found anew only when the decay changes. */
+function createDecayFactors() {
+  const lags = new Float64Array(CELL_COUNT);
+  const shares = new Float64Array(CELL_COUNT);
+  const known = new Float64Array(BAND_COUNT).fill(Number.NaN);
+  return {
+    lags,
+    shares,
+    of(decayS: Float64Array): void {
+      if (known.every((seconds, b) => seconds === decayS[b])) return;
+      known.set(decayS);
+      for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
+        for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
+          lags[cell] = (MODULATION_RAD_PER_S[f] * decayS[b]) / DECAY_NEPERS;
+          shares[cell] = 1 / (1 + lags[cell] * lags[cell]);
+        }
+      }
+    },
   };
 }
 
