@@ -47,45 +47,32 @@ export interface TransmissionIndex {
  * diffuse part). Only the modulus counts, so times are taken from the first arrival added, which may be in any order.
  */
 export function createTransmissionIndex(): TransmissionIndex {
-  const speech = new Float64Array(BAND_COUNT);
   const totals = new Float64Array(BAND_COUNT);
   const mti = new Float64Array(BAND_COUNT);
-  // The complex sums, [band][frequency], stride 14, as real − j·lag: both parts grow from positive sines.
-  const real = new Float64Array(CELL_COUNT);
-  const lag = new Float64Array(CELL_COUNT);
   const modulations = new Float64Array(CELL_COUNT);
-  const cos = new Float64Array(MODULATION_COUNT);
-  const sin = new Float64Array(MODULATION_COUNT);
-  // Discrete arrivals wait until there are four, so that each cell of the sums is fetched and stored once for four.
-  const waitingCos = new Float64Array(BATCH * MODULATION_COUNT);
-  const waitingSin = new Float64Array(BATCH * MODULATION_COUNT);
-  const waitingEnergies = new Float64Array(BATCH * BAND_COUNT);
-  let waiting = 0;
+  const discrete = createSums();
+  // Diffuse remainders are summed as if they were discrete; the one factor that makes them decay comes last.
+  const diffuse = createSums();
   const decay = createDecayFactors();
+  const { speech, real, lag } = discrete;
   let originS = Number.NaN;
 
-  function turn(timeS: number): void {
+  function sinceFirst(timeS: number): number {
     if (Number.isNaN(originS)) originS = timeS;
-    phasesAt(timeS - originS, cos, sin);
+    return timeS - originS;
   }
 
-  function sumWaiting(): void {
-    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((i) => i * MODULATION_COUNT);
+  function foldDiffuse(): void {
+    diffuse.settle();
     for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
-      const e0 = waitingEnergies[b];
-      const e1 = waitingEnergies[BAND_COUNT + b];
-      const e2 = waitingEnergies[2 * BAND_COUNT + b];
-      const e3 = waitingEnergies[3 * BAND_COUNT + b];
-      speech[b] += e0 + e1 + e2 + e3;
+      speech[b] += diffuse.speech[b];
       for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
-        real[cell] +=
-          e0 * waitingCos[c0 + f] + e1 * waitingCos[c1 + f] + e2 * waitingCos[c2 + f] + e3 * waitingCos[c3 + f];
-        lag[cell] +=
-          e0 * waitingSin[c0 + f] + e1 * waitingSin[c1 + f] + e2 * waitingSin[c2 + f] + e3 * waitingSin[c3 + f];
+        const lagging = decay.lags[cell];
+        real[cell] += decay.shares[cell] * (diffuse.real[cell] - lagging * diffuse.lag[cell]);
+        lag[cell] += decay.shares[cell] * (diffuse.lag[cell] + lagging * diffuse.real[cell]);
       }
     }
-    waitingEnergies.fill(0);
-    waiting = 0;
+    diffuse.clear();
   }
 
   function divideBy(powers: Float64Array): Float64Array {
@@ -101,47 +88,85 @@ export function createTransmissionIndex(): TransmissionIndex {
   return {
     mti,
     reset() {
-      speech.fill(0);
-      real.fill(0);
-      lag.fill(0);
-      waitingEnergies.fill(0);
-      waiting = 0;
+      discrete.clear();
+      diffuse.clear();
       originS = Number.NaN;
     },
-    add(timeS, energies, at) {
-      turn(timeS);
-      waitingCos.set(cos, waiting * MODULATION_COUNT);
-      waitingSin.set(sin, waiting * MODULATION_COUNT);
-      for (let b = 0; b < BAND_COUNT; b++) waitingEnergies[waiting * BAND_COUNT + b] = energies[at + b];
-      if (++waiting === BATCH) sumWaiting();
-    },
+    add: (timeS, energies, at) => discrete.add(sinceFirst(timeS), energies, at),
     addDiffuse(startS, energies, at, decayS) {
-      turn(startS);
-      decay.of(decayS);
-      for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
-        const energy = energies[at + b];
-        speech[b] += energy;
-        for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
-          const lagging = decay.lags[cell];
-          const share = energy * decay.shares[cell];
-          real[cell] += share * (cos[f] - lagging * sin[f]);
-          lag[cell] += share * (sin[f] + lagging * cos[f]);
-        }
+      if (!decay.isOf(decayS)) {
+        foldDiffuse();
+        decay.set(decayS);
       }
+      diffuse.add(sinceFirst(startS), energies, at);
     },
     finish(noisePowers) {
-      sumWaiting();
+      discrete.settle();
+      foldDiffuse();
       auditoryPowers(speech, noisePowers, totals);
       return indexOf(divideBy(totals), mti);
     },
     modulationsInQuiet() {
-      sumWaiting();
+      discrete.settle();
+      foldDiffuse();
       return divideBy(speech).slice();
     },
   };
 }
 
-/** y = 2πF·T/13.8155 and 1/(1 + y²) of each cell, found anew only when the decay changes. */
+/**
+ * Energies of arrivals, [band], and their complex sums, [band][frequency], stride 14, as real − j·lag: both parts grow
+ * from positive sines. Arrivals wait until there are four, so that each cell is fetched and stored once for four.
+ */
+function createSums() {
+  const speech = new Float64Array(BAND_COUNT);
+  const real = new Float64Array(CELL_COUNT);
+  const lag = new Float64Array(CELL_COUNT);
+  const cos = new Float64Array(BATCH * MODULATION_COUNT);
+  const sin = new Float64Array(BATCH * MODULATION_COUNT);
+  const energy = new Float64Array(BATCH * BAND_COUNT);
+  let waiting = 0;
+
+  /** Takes in what waits. */
+  function settle(): void {
+    if (waiting === 0) return;
+    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((i) => i * MODULATION_COUNT);
+    for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
+      const e0 = energy[b];
+      const e1 = energy[BAND_COUNT + b];
+      const e2 = energy[2 * BAND_COUNT + b];
+      const e3 = energy[3 * BAND_COUNT + b];
+      speech[b] += e0 + e1 + e2 + e3;
+      for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
+        real[cell] += e0 * cos[c0 + f] + e1 * cos[c1 + f] + e2 * cos[c2 + f] + e3 * cos[c3 + f];
+        lag[cell] += e0 * sin[c0 + f] + e1 * sin[c1 + f] + e2 * sin[c2 + f] + e3 * sin[c3 + f];
+      }
+    }
+    energy.fill(0);
+    waiting = 0;
+  }
+
+  return {
+    speech,
+    real,
+    lag,
+    settle,
+    add(delayS: number, energies: Float64Array, at: number): void {
+      phasesAt(delayS, cos, sin, waiting * MODULATION_COUNT);
+      for (let b = 0; b < BAND_COUNT; b++) energy[waiting * BAND_COUNT + b] = energies[at + b];
+      if (++waiting === BATCH) settle();
+    },
+    clear(): void {
+      speech.fill(0);
+      real.fill(0);
+      lag.fill(0);
+      energy.fill(0);
+      waiting = 0;
+    },
+  };
+}
+
+/** y = 2πF·T/13.8155 and 1/(1 + y²) of each cell, kept for the decay they are of. */
 function createDecayFactors() {
   const lags = new Float64Array(CELL_COUNT);
   const shares = new Float64Array(CELL_COUNT);
@@ -149,8 +174,11 @@ function createDecayFactors() {
   return {
     lags,
     shares,
-    of(decayS: Float64Array): void {
-      if (known.every((seconds, b) => seconds === decayS[b])) return;
+    isOf(decayS: Float64Array): boolean {
+      for (let b = 0; b < BAND_COUNT; b++) if (known[b] !== decayS[b]) return false;
+      return true;
+    },
+    set(decayS: Float64Array): void {
       known.set(decayS);
       for (let b = 0, cell = 0; b < BAND_COUNT; b++) {
         for (let f = 0; f < MODULATION_COUNT; f++, cell++) {
@@ -220,14 +248,14 @@ const COSINES = Float64Array.from({ length: TURN_STEPS + 1 }, (_, i) => Math.cos
 const SINES = Float64Array.from({ length: TURN_STEPS + 1 }, (_, i) => Math.sin((2 * Math.PI * i) / TURN_STEPS));
 const STEPS_PER_S = Float64Array.from(MODULATION_HZ, (frequencyHz) => TURN_STEPS * frequencyHz);
 
-/** Cosine and sine of 2πF·delay for the fourteen frequencies; a table, because rooms ask for millions of them. */
-function phasesAt(delayS: number, cos: Float64Array, sin: Float64Array): void {
+/** Cosine and sine of 2πF·delay for the fourteen frequencies, written from `at`; a table, because rooms ask for millions of them. */
+function phasesAt(delayS: number, cos: Float64Array, sin: Float64Array, at: number): void {
   for (let f = 0; f < MODULATION_COUNT; f++) {
     const steps = delayS * STEPS_PER_S[f];
     const whole = Math.floor(steps);
     const part = steps - whole;
     const i = whole & (TURN_STEPS - 1);
-    cos[f] = COSINES[i] + part * (COSINES[i + 1] - COSINES[i]);
-    sin[f] = SINES[i] + part * (SINES[i + 1] - SINES[i]);
+    cos[at + f] = COSINES[i] + part * (COSINES[i + 1] - COSINES[i]);
+    sin[at + f] = SINES[i] + part * (SINES[i + 1] - SINES[i]);
   }
 }
