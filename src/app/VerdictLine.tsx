@@ -26,11 +26,12 @@ export default function VerdictLine() {
   }
   if (error !== undefined) {
     const { text, ref } = refOfPath(layout, error.path);
-    const said: Said[] = [
-      { text: 'Not predicted: ' },
-      ref === null ? { text } : { text, ref },
-      { text: text === '' ? sayProblem({ ...error, path: '' }) : `: ${sayProblem({ ...error, path: '' })}` },
-    ];
+    const words = sayProblem({ ...error, path: '' });
+    // "c1 is outside the room" names what it is about; anything else is led by its place.
+    const named = ref !== null && words.startsWith(`${ref.id} `);
+    const place: Said = { text: named ? ref.id : text, ...(ref !== null && { ref }) };
+    const rest = named ? words.slice(ref.id.length) : `${text === '' ? '' : ': '}${words}`;
+    const said: Said[] = [{ text: 'Not predicted: ' }, place, { text: rest }];
     return <Line sentence={said} trouble />;
   }
   if (prediction === null) return <Line sentence={[{ text: 'Predicting every seat…' }]} />;
