@@ -2,7 +2,7 @@ import { createContext, type ReactNode, useContext } from 'react';
 import { NOMINAL_HZ } from '../acoustics/bands';
 import { type Phase, QuantityField, type QuantityFieldProps } from '../controls/QuantityField';
 import { sayProblem } from '../layout/problem';
-import { figure, octaveFigure } from '../report/figures';
+import { BAND_NAMES, figure, octaveFigure } from '../report/figures';
 import { lengthFigure, lengthUnit, parseLength } from '../report/units';
 import { useSession } from '../session/session';
 import { type ItemProblem, problemsOn } from './problems-of';
@@ -60,9 +60,9 @@ export function LengthField({ digits = 2, step, ...props }: LengthProps) {
 
 /** The octaves of the columns below. */
 function OctaveHeads() {
-  return NOMINAL_HZ.map((hz) => (
-    <span className="octave-head" key={hz} aria-hidden="true">
-      {hz < 1000 ? hz : `${hz / 1000} k`}
+  return BAND_NAMES.map((name) => (
+    <span className="octave-head" key={name} aria-hidden="true">
+      {name}
     </span>
   ));
 }
@@ -79,9 +79,9 @@ export function OctaveFigures({
       <thead>
         <tr>
           <th scope="col">Hz</th>
-          {NOMINAL_HZ.map((hz) => (
-            <th scope="col" key={hz}>
-              {hz < 1000 ? hz : `${hz / 1000} k`}
+          {BAND_NAMES.map((name) => (
+            <th scope="col" key={name}>
+              {name}
             </th>
           ))}
         </tr>

@@ -4,11 +4,10 @@ import { noiseLevelsOfNr } from '../acoustics/speech/noise';
 import { talkerLevelsDb, VOCAL_EFFORT_DBA } from '../acoustics/speech/spectra';
 import BandChart from '../controls/BandChart';
 import { type Contribution, GOOD_ABSORBER, studyDecay } from '../predict/studies/decay';
-import { figure, octaveFigure } from '../report/figures';
+import { BAND_NAMES, figure, octaveFigure } from '../report/figures';
 import { useLayout, useSession } from '../session/session';
 import './room-charts.css';
 
-const BANDS = NOMINAL_HZ.map((hz) => (hz < 1000 ? String(hz) : `${hz / 1000} k`));
 const MOST_ROWS = 8;
 
 /** What the room does by octave: its decay, what absorbs, and how the voice stands against the noise. */
@@ -25,7 +24,7 @@ export function RoomCharts() {
           label="Decay by octave"
           unit="s"
           series={[{ label: 'Decay', values: venue.decayS }]}
-          bands={BANDS}
+          bands={BAND_NAMES}
           write={(value) => figure(value, 1)}
         />
       </section>
@@ -123,7 +122,7 @@ function VoiceAndNoise() {
         label="Voice and noise by octave"
         unit="dB"
         series={series}
-        bands={BANDS}
+        bands={BAND_NAMES}
         least={20}
         write={(value) => figure(value, 0)}
       />

@@ -5,6 +5,7 @@ import { useLayout, useScheme } from '../session/session';
 import { bind } from './binding';
 import { OtherProblems, Row } from './Fields';
 import { NameRow, Ways } from './ItemHead';
+import { LoopFigures } from './LoopFigures';
 import { SendField } from './SendsTable';
 
 /** Name and notes of the scheme shown. */
@@ -46,6 +47,7 @@ export function SchemePanel() {
       <p className="item-note">
         {count(scheme.microphones.length, 'microphone')}, {count(scheme.loudspeakers.length, 'loudspeaker')}.
       </p>
+      <LoopFigures />
     </>
   );
 }

@@ -1,3 +1,5 @@
+import { NOMINAL_HZ } from '../acoustics/bands';
+
 /** What is written where there is no finite number. */
 export const NO_FIGURE = '–';
 
@@ -30,6 +32,9 @@ export function marginFigure(value: number | null): string {
 
 /** The size of a shortfall or a reserve in dB, without its sign, likewise never rounded to nothing. */
 export const amountFigure = (value: number): string => marginFigure(value).replace(/^[+−]/, '');
+
+/** The octaves as an axis or a table head names them. */
+export const BAND_NAMES: readonly string[] = NOMINAL_HZ.map((hz) => (hz < 1000 ? String(hz) : `${hz / 1000} k`));
 
 /** An octave by its nominal frequency: "500 Hz", "2 kHz". */
 export const octaveFigure = (nominalHz: number): string =>
