@@ -38,6 +38,7 @@ export function imageTree(faces: Faces, x: number, y: number, z: number, host: n
         const [px, py, pz] = [positions[3 * parent], positions[3 * parent + 1], positions[3 * parent + 2]];
         const height = heightAbove(faces, face, px, py, pz);
         if (Math.abs(height) <= ON_PLANE_M || (height < 0 && !faces.twoSided[face])) continue;
+        if (parent > 0 && !isLit(faces, met[parent], px, py, pz, face)) continue;
         for (let axis = 0; axis < 3; axis++) {
           positions.push(positions[3 * parent + axis] - 2 * height * faces.normals[3 * face + axis]);
         }
@@ -59,6 +60,47 @@ export function imageTree(faces: Faces, x: number, y: number, z: number, host: n
     reflected: Float64Array.from(reflected),
     twins: findTwins(all),
   };
+}
+
+/** A face this far outside the beam is dark, metres: far more than a point may lie outside an outline. */
+const DARK_M = 1e-4;
+
+/**
+ * False where no ray from an image, through the face it was mirrored in, can reach another face (Borish's proximity
+ * and visibility tests as one beam): that face lies wholly behind the mirror or wholly beyond one of its edges.
+ * Dropping it loses no path; it keeps the tree from growing with every face at every order.
+ */
+function isLit(faces: Faces, mirror: number, x: number, y: number, z: number, face: number): boolean {
+  const target = faces.corners[face];
+  const front = heightAbove(faces, mirror, x, y, z) < 0 ? 1 : -1;
+  let ahead = false;
+  for (let i = 0; i < target.length && !ahead; i += 3) {
+    // A face that only touches the mirror's plane may still be met in the edge they share.
+    ahead = front * heightAbove(faces, mirror, target[i], target[i + 1], target[i + 2]) >= -ON_PLANE_M;
+  }
+  if (!ahead) return false;
+  // The beam of a concave mirror is not bounded by the planes through its edges.
+  if (faces.edgePlanes[mirror] === null) return true;
+  const edge = faces.corners[mirror];
+  const n = edge.length / 3;
+  for (let i = 0; i < n; i++) {
+    const [a, b, inner] = [3 * i, 3 * ((i + 1) % n), 3 * ((i + 2) % n)];
+    const [ax, ay, az] = [edge[a] - x, edge[a + 1] - y, edge[a + 2] - z];
+    const [bx, by, bz] = [edge[b] - x, edge[b + 1] - y, edge[b + 2] - z];
+    const [nx, ny, nz] = [ay * bz - az * by, az * bx - ax * bz, ax * by - ay * bx];
+    const inside = nx * (edge[inner] - x) + ny * (edge[inner + 1] - y) + nz * (edge[inner + 2] - z);
+    const length = Math.hypot(nx, ny, nz);
+    // Three corners in line, or an image in the edge's own line, bound nothing.
+    if (Math.abs(inside) <= DARK_M * length) continue;
+    const limit = -DARK_M * length;
+    let dark = true;
+    for (let k = 0; k < target.length && dark; k += 3) {
+      const beyond = nx * (target[k] - x) + ny * (target[k + 1] - y) + nz * (target[k + 2] - z);
+      dark = Math.sign(inside) * beyond < limit;
+    }
+    if (dark) return false;
+  }
+  return true;
 }
 
 function findTwins(positions: Float64Array): Int32Array {
