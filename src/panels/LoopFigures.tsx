@@ -1,10 +1,11 @@
 import { NOMINAL_HZ } from '../acoustics/bands';
 import BandChart from '../controls/BandChart';
+import { talkerLabel } from '../layout/talker-label';
 import { RUNGS } from '../predict/prediction';
 import { BAND_NAMES, figure, octaveFigure, signedFigure } from '../report/figures';
 import { RUNG_LABELS } from '../report/quantities';
 import { useLayout, useSchemePrediction, useSession } from '../session/session';
-import { criticalTalker, talkerLabel } from './device-figures';
+import { criticalTalker } from './device-figures';
 import { Said } from './Fields';
 import './room-charts.css';
 

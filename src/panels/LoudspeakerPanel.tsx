@@ -2,6 +2,7 @@ import { Action } from '../controls/Action';
 import { QuantityField } from '../controls/QuantityField';
 import { editLoudspeaker, setDelays } from '../layout/edits';
 import type { Loudspeaker } from '../layout/schema';
+import { talkerLabel } from '../layout/talker-label';
 import { figure } from '../report/figures';
 import { loudspeakerFigures, proposedDelays } from '../report/loudspeaker-figures';
 import { lengthFigure, lengthUnit } from '../report/units';
@@ -9,7 +10,7 @@ import { useLayout, useScheme, useSchemePrediction, useSession } from '../sessio
 import { bind, type DeviceRef, editOnce } from './binding';
 import { ModelRows } from './DeviceRows';
 import { Directivity } from './Directivity';
-import { loopShare, talkerLabel } from './device-figures';
+import { loopShare } from './device-figures';
 import { OtherProblems, Row, Said } from './Fields';
 import { ItemHead, NameRow } from './ItemHead';
 import { AimRow, PlaceRow, TurnRow, useAim } from './PlaceRows';

@@ -1,13 +1,14 @@
 import { Toggle } from '../controls/Toggle';
 import { editMicrophone } from '../layout/edits';
 import type { Microphone } from '../layout/schema';
+import { talkerLabel } from '../layout/talker-label';
 import { figure } from '../report/figures';
 import { lengthFigure, lengthUnit } from '../report/units';
 import { useLayout, useScheme, useSchemePrediction, useSession } from '../session/session';
 import { type DeviceRef, editOnce } from './binding';
 import { ModelRows } from './DeviceRows';
 import { Directivity } from './Directivity';
-import { loopShare, nearestTalker, talkerLabel } from './device-figures';
+import { loopShare, nearestTalker } from './device-figures';
 import { OtherProblems, Row, Said } from './Fields';
 import { ItemHead, NameRow } from './ItemHead';
 import { AimRow, PlaceRow, TurnRow, useAim } from './PlaceRows';

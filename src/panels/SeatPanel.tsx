@@ -1,11 +1,11 @@
 import { Action } from '../controls/Action';
 import { seatsOf } from '../layout/seating';
+import { talkerLabel } from '../layout/talker-label';
 import { RUNGS } from '../predict/prediction';
 import { figure, marginFigure, NO_FIGURE } from '../report/figures';
 import { RUNG_LABELS } from '../report/quantities';
 import { lengthText } from '../report/units';
 import { useLayout, useSchemePrediction, useSession } from '../session/session';
-import { talkerLabel } from './device-figures';
 import { ItemHead } from './ItemHead';
 
 /** One seat: where it is, and what it gets from every talker on all three rungs. */

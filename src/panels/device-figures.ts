@@ -1,10 +1,6 @@
-import type { Layout, Talker } from '../layout/schema';
+import type { Talker } from '../layout/schema';
 import type { SchemePrediction, TalkerPrediction } from '../predict/prediction';
 import { least, talkersMeant } from '../report/loudspeaker-figures';
-
-/** A talker's name as people read it. */
-export const talkerLabel = (layout: Layout, id: string): string =>
-  layout.venue.talkers.find((talker) => talker.id === id)?.label || id;
 
 /** The talker whose loop may be raised least, of those meant. */
 export function criticalTalker(scheme: SchemePrediction, chosen: string | null): TalkerPrediction | null {

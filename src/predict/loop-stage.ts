@@ -160,8 +160,7 @@ export function idleLimits(
 export function workingPoint(
   venue: PreparedVenue,
   scheme: PreparedScheme,
-  room: RungState,
-  directReturns: RungGains,
+  { room, directivity }: Record<Rung, RungState>,
 ): WorkingPoint {
   const { limitDb, idleLimitDb } = room.loop;
   const { limitingBand, radii } = room.limit;
@@ -171,7 +170,7 @@ export function workingPoint(
   const marginDb = scheme.system.belowLimit ?? scheme.system.stabilityMargin;
   const workingGainDb = Math.min(limitDb, idleLimitDb ?? limitDb) - marginDb;
   const left = 1 - radii[limitingBand] * powerOfDb(workingGainDb);
-  const direct = loopInput(scheme, directReturns, 'directivity', BAND_COUNT);
+  const direct = directivity.input;
   const directRadius = spectralRadius(loopMatrix(direct, room.share, limitingBand), direct.microphones);
   const allowanceDb = peakAllowanceDb({
     ratio: directToScattered(radii[limitingBand], directRadius),

@@ -64,7 +64,7 @@ export function loopsOf(venue: PreparedVenue, scheme: PreparedScheme): TalkerLoo
     return {
       talker,
       states,
-      point: workingPoint(venue, scheme, states.room, returns),
+      point: workingPoint(venue, scheme, states),
       lengthsM: toMicrophones.lengthsM.slice(t * M, (t + 1) * M),
     };
   });

@@ -1,5 +1,6 @@
 import type { Problem } from '../layout/problem';
 import type { Layout, Scheme } from '../layout/schema';
+import { talkerLabel } from '../layout/talker-label';
 import type { Prediction } from '../predict/prediction';
 import { figure } from './figures';
 
@@ -43,7 +44,7 @@ function ofPrediction(layout: Layout, scheme: Scheme, prediction: Prediction): s
   if (predicted === undefined) return [];
   const said: string[] = [];
   for (const talker of predicted.talkers) {
-    const label = layout.venue.talkers.find((candidate) => candidate.id === talker.id)?.label || talker.id;
+    const label = talkerLabel(layout, talker.id);
     if (talker.working.belowPeakAllowance) {
       const kept = scheme.system.belowLimit ?? scheme.system.stabilityMargin;
       said.push(

@@ -1,6 +1,7 @@
 import { NOMINAL_HZ } from '../acoustics/bands';
 import type { Problem } from '../layout/problem';
 import type { Layout, Scheme } from '../layout/schema';
+import { talkerLabel } from '../layout/talker-label';
 import { type Prediction, RUNGS, type Rung, type SchemePrediction } from '../predict/prediction';
 import { cautions, NOT_MODELLED } from './cautions';
 import { figure, marginFigure, octaveFigure, plainFigure } from './figures';
@@ -66,7 +67,7 @@ function loopTable(layout: Layout, predicted: SchemePrediction): string[] {
     RUNGS.map((rung: Rung, i) => {
       const loop = talker.loop[rung];
       const band = rung === 'distance' || loop.limitingBand < 0 ? '' : octaveFigure(NOMINAL_HZ[loop.limitingBand]);
-      const label = nameOf(layout, talker.id);
+      const label = talkerLabel(layout, talker.id);
       return [
         i === 0 ? label : '',
         RUNG_LABELS[rung],
@@ -103,7 +104,7 @@ function loudspeakerTable(scheme: Scheme, predicted: SchemePrediction): string[]
 /** How even the total level is over the seats, by talker. */
 function levelTable(layout: Layout, predicted: SchemePrediction): string[] {
   const rows = predicted.talkers.map((talker) => [
-    nameOf(layout, talker.id),
+    talkerLabel(layout, talker.id),
     figure(talker.uniformity.spreadDb),
     figure(talker.uniformity.deviationDb),
     figure(talker.working.regenerationDb),
@@ -113,9 +114,6 @@ function levelTable(layout: Layout, predicted: SchemePrediction): string[] {
   return columns([heads, ...rows], [true, false, false, false, false]);
 }
 
-const nameOf = (layout: Layout, id: string): string =>
-  layout.venue.talkers.find((talker) => talker.id === id)?.label || id;
-
 function worstSeats(prediction: Prediction, predicted: SchemePrediction, layout: Layout): string[] {
   const order = prediction.seats
     .map((_, seat) => ({ seat, standing: seatStanding(predicted, null, seat) }))
@@ -124,7 +122,7 @@ function worstSeats(prediction: Prediction, predicted: SchemePrediction, layout:
     .slice(0, WORST_SEATS);
   const rows = order.map(({ seat, standing }) => {
     const talker = predicted.talkers[standing.talker];
-    const label = nameOf(layout, talker.id);
+    const label = talkerLabel(layout, talker.id);
     return [
       prediction.seats[seat].id,
       label,

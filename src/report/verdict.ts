@@ -1,6 +1,7 @@
 import { NOMINAL_HZ } from '../acoustics/bands';
 import type { Ref } from '../layout/ref';
 import type { Layout, Scheme } from '../layout/schema';
+import { talkerLabel } from '../layout/talker-label';
 import type { Prediction, SchemePrediction } from '../predict/prediction';
 import { amountFigure, count, figure, octaveFigure, plainFigure } from './figures';
 import { summarise } from './quantities';
@@ -81,7 +82,7 @@ function sayWorst(
     ref: { kind: 'seat', id: prediction.seats[summary.worstSeat].id },
   };
   const id = predicted.talkers[summary.worstTalker].id;
-  const label = layout.venue.talkers.find((talker) => talker.id === id)?.label || id;
+  const label = talkerLabel(layout, id);
   const talker: Said = { text: label, ref: { kind: 'talker', id } };
   const marginDb = summary.worstMarginDb;
   if (Number.isNaN(marginDb)) return [{ text: '; the worst, ' }, seat, { text: ', is not reached for ' }, talker];

@@ -1,4 +1,5 @@
 import type { CSSProperties, Ref } from 'react';
+import { talkerLabel } from '../layout/talker-label';
 import { RUNGS } from '../predict/prediction';
 import { figure, marginFigure } from '../report/figures';
 import { RUNG_LABELS, seatStanding } from '../report/quantities';
@@ -49,7 +50,7 @@ function Figures({ scene, index }: { scene: RoomScene; index: number }) {
     );
   }
   const talker = predicted.talkers[standing.talker];
-  const label = layout.venue.talkers.find(({ id }) => id === talker.id)?.label || talker.id;
+  const label = talkerLabel(layout, talker.id);
   const servedBy = talker.room.servedBy[seatInPrediction];
   return (
     <>

@@ -1,6 +1,7 @@
 import { figure, signedFigure } from '../report/figures';
+import { MARGIN_STOPS_DB } from '../report/margin-colour';
 import type { Quantity } from '../report/quantities';
-import { cssColour, MARGIN_STOPS_DB } from './colour-scale';
+import { cssColour } from './colour-scale';
 import type { ThemeColours } from './theme-colours';
 import type { RoomScene } from './use-room-scene';
 

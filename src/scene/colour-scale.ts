@@ -1,8 +1,6 @@
+import { MARGIN_STOPS_DB } from '../report/margin-colour';
 /** A colour in linear light, 0 to 1: what vertex colours are given in. */
 export type Rgb = readonly [number, number, number];
-
-/** Distances from zero at which an arm of the margin scale has its stops, dB. */
-export const MARGIN_STOPS_DB: readonly number[] = [0, 1, 3, 6];
 
 /** The colours a scale is made of, each a hexadecimal colour of the theme. */
 export interface ScaleTokens {
